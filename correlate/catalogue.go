@@ -1,0 +1,15 @@
+package correlate
+
+import "slices"
+
+// catalogue is every entry, in the order in which it is listed. A new section
+// is one line here.
+var catalogue = slices.Concat(
+	compressionFromLiquidLimit,
+	compressionFromVoidRatio,
+	compressionAzzouz,
+	compressionReconstituted,
+	compressionOrganic,
+	compressionRatio,
+	recompression,
+)
