@@ -1,0 +1,93 @@
+package history
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/stat/distuv"
+)
+
+// cdf returns the standard normal distribution function.
+func cdf(x float64) float64 { return 0.5 * math.Erfc(-x/math.Sqrt2) }
+
+// quantile returns the inverse of cdf.
+func quantile(p float64) float64 { return distuv.UnitNormal.Quantile(p) }
+
+// A mixture is a weighted sum of normal distributions, weights adding to one.
+type mixture struct{ weight, mean, sd []float64 }
+
+func (m *mixture) add(w, mean, sd float64) {
+	m.weight = append(m.weight, w)
+	m.mean = append(m.mean, mean)
+	m.sd = append(m.sd, sd)
+}
+
+// below returns the probability of a value below x.
+func (m *mixture) below(x float64) float64 {
+	p := 0.0
+	for i, w := range m.weight {
+		p += w * cdf((x-m.mean[i])/m.sd[i])
+	}
+	return p
+}
+
+// moments returns mean and standard deviation.
+func (m *mixture) moments() (mean, sd float64) {
+	second := 0.0
+	for i, w := range m.weight {
+		mean += w * m.mean[i]
+	}
+	for i, w := range m.weight {
+		d := m.mean[i] - mean
+		second += w * (m.sd[i]*m.sd[i] + d*d)
+	}
+	return mean, math.Sqrt(second)
+}
+
+// at returns the value that a share p lies below, by Newton steps kept inside
+// a shrinking bracket.
+func (m *mixture) at(p float64) float64 {
+	mean, sd := m.moments()
+	low, high := mean-12*sd, mean+12*sd
+	x := mean + sd*quantile(p)
+	for range 60 {
+		f, slope := -p, 0.0
+		for i, w := range m.weight {
+			u := (x - m.mean[i]) / m.sd[i]
+			f += w * cdf(u)
+			slope += w * math.Exp(-0.5*u*u) / (m.sd[i] * math.Sqrt(2*math.Pi))
+		}
+		if f > 0 {
+			high = x
+		} else {
+			low = x
+		}
+		next := x - f/slope
+		if !(next > low && next < high) {
+			next = 0.5 * (low + high)
+		}
+		if math.Abs(next-x) < 1e-10 {
+			return next
+		}
+		x = next
+	}
+	return x
+}
+
+// band returns the 5, 50 and 95 % points.
+func (m *mixture) band() Band { return Band{m.at(0.05), m.at(0.50), m.at(0.95)} }
+
+// logNormal returns the log density of a normal distribution.
+func logNormal(d, variance float64) float64 {
+	return -0.5*d*d/variance - 0.5*math.Log(2*math.Pi*variance)
+}
+
+// addLog returns ln(e^a + e^b).
+func addLog(a, b float64) float64 {
+	if a < b {
+		a, b = b, a
+	}
+	if math.IsInf(b, -1) {
+		return a
+	}
+	return a + math.Log1p(math.Exp(b-a))
+}
