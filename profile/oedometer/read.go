@@ -1,0 +1,79 @@
+package oedometer
+
+import (
+	"math"
+)
+
+// A reading is what the constructions together make of one loading.
+type reading struct {
+	in       *input
+	methods  []Method
+	apparent Yield
+	yield    Yield
+	bound    Bound
+	why      string // why it is a bound
+	notes    []string
+	spread   float64
+	q        Number
+}
+
+// readLoading runs all constructions on a loading, combines them, and shuts the
+// gates where the test cannot tell.
+func readLoading(l *loading, around surroundings) reading {
+	around.detail = true
+	in, ok := newInput(l, around, virginShare)
+	r := reading{in: in}
+	if q, _, known := l.steepening(); known {
+		r.q = Known(q)
+	}
+	if !ok {
+		r.methods = blankMethods("no two lines can be told apart")
+		r.noBreak()
+		return r
+	}
+	outcomes := in.values()
+	mean, disagreement, ok := combine(outcomes)
+	if !ok {
+		r.methods = blankMethods("no construction gave a value")
+		r.noBreak()
+		return r
+	}
+	best := math.Exp(mean)
+	sd := in.deviation(around, mean, disagreement, outcomes)
+	r.apparent = Yield{Low: math.Exp(mean - ninety*sd), Best: best, High: math.Exp(mean + ninety*sd)}
+	r.report(outcomes)
+	r.gate()
+	return r
+}
+
+// report turns outcomes into methods and sets their spread.
+func (r *reading) report(outcomes []outcome) {
+	low, high, n := math.Inf(1), 0.0, 0
+	for i, o := range outcomes {
+		c := constructions[i]
+		m := Method{ID: c.id, Name: c.name, Mark: c.mark, Note: o.note, Known: o.ok, Used: o.ok, Lines: o.lines}
+		if o.ok {
+			known := calibrations[c.id]
+			m.Stress = o.stress
+			m.Low = o.stress * math.Exp(-known.bias-ninety*known.scatter)
+			m.High = o.stress * math.Exp(-known.bias+ninety*known.scatter)
+			low, high, n = math.Min(low, o.stress), math.Max(high, o.stress), n+1
+		}
+		for _, k := range o.points {
+			m.Points = append(m.Points, r.in.origin[k])
+		}
+		r.methods = append(r.methods, m)
+	}
+	if n > 1 {
+		r.spread = high / low
+	}
+}
+
+// blankMethods returns every construction refused for one reason.
+func blankMethods(why string) []Method {
+	var methods []Method
+	for _, c := range constructions {
+		methods = append(methods, Method{ID: c.id, Name: c.name, Mark: c.mark, Note: why})
+	}
+	return methods
+}
