@@ -1,0 +1,84 @@
+package design
+
+import "fmt"
+
+// advise chooses a way and says why.
+func (p *Parameter) advise(o Options, edition Edition, e evaluation) {
+	p.Term = edition.Term
+	if edition.second {
+		p.Term += " (characteristic)"
+	}
+	switch {
+	case p.N == 0:
+		p.Method, p.Term = "none", ""
+		p.MethodReason = "No value is left to compute from."
+	case p.N < fewValues:
+		p.Method, p.Term = "range and median only", ""
+		if edition.second {
+			p.Term = edition.Term + " (nominal, by judgement)"
+		}
+		p.MethodReason = fmt.Sprintf("%s too few for a formula: the range and the median are given, and a value is a matter of judgement and comparable experience.", values(p.N, "is", "are"))
+	case e.line != nil && e.line.Real():
+		p.adviseLine(o, e)
+	case edition.means:
+		p.take(WayMeanLessSD, "Mean values go into design where the factors were calibrated to means; one standard deviation either side is for few or scattered data. The COV stands beside it.")
+	default:
+		p.adviseConstant(o, e)
+	}
+}
+
+// adviseLine takes the regression line: one value would hide the trend.
+func (p *Parameter) adviseLine(o Options, e evaluation) {
+	id := "line-mean"
+	if o.Estimate == Fractile {
+		id = "line-fractile"
+	}
+	p.take(id, fmt.Sprintf("The values change with depth by %s per metre (p = %s), so a line is used and not one value; it holds from %.2f to %.2f m only.",
+		quantityText(e.line.SlopeAt(p.middle()), p.Unit), chance(e.line.P), e.line.From, e.line.To))
+}
+
+// middle is the middle of the tested depths.
+func (p *Parameter) middle() float64 { return p.Trend.From + (p.Trend.To-p.Trend.From)/2 }
+
+// adviseConstant takes a constant: the sample's own variance where it is large
+// enough to know it or larger than assumed, else the assumed one.
+func (p *Parameter) adviseConstant(o Options, e evaluation) {
+	own, assumed := WayMeanUnknown, WayMeanKnown
+	what := "The mean over a large zone is taken to govern"
+	if o.Estimate == Fractile {
+		own, assumed = WayFractileUnknown, WayFractileKnown
+		what = "The worst 5 % of the ground is taken to govern"
+	}
+	n := float64(p.N)
+	counted := values(p.N, "is", "are")
+	if o.EffectiveCount {
+		n = e.count
+		counted += fmt.Sprintf(" worth %.1f independent ones, which is", n)
+	}
+	scatter := p.COV
+	switch {
+	case n >= manyValues:
+		p.take(own, fmt.Sprintf("%s; %s enough to know the scatter from the sample.", what, counted))
+	case e.q.cov == 0 || !scatter.Known:
+		p.take(own, fmt.Sprintf("%s; no usual scatter is known for this quantity, so that of the sample is used, with the margin that %s due.", what, counted))
+	case scatter.Value > e.q.cov:
+		p.take(own, fmt.Sprintf("%s; the sample scatters more (COV %.2f) than is usual (%.2f), so its own scatter is used.", what, scatter.Value, e.q.cov))
+	default:
+		p.take(assumed, fmt.Sprintf("%s; %s too few to know the scatter, and the sample scatters no more (COV %.2f) than is usual, so a COV of %.2f is assumed.", what, counted, scatter.Value, e.q.cov))
+	}
+	if p.Way == "" {
+		p.Method = "range and median only"
+		p.MethodReason = "The values lie so close together in depth that they are worth too few independent ones for a formula."
+	}
+}
+
+// take makes the alternative of that identifier the advised one.
+func (p *Parameter) take(id, reason string) {
+	for _, a := range p.Alternatives {
+		if a.ID == id {
+			p.Way, p.Method, p.MethodReason = id, a.Method, reason
+			p.Low, p.High = a.Low, a.High
+			return
+		}
+	}
+}

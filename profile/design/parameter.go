@@ -1,0 +1,273 @@
+package design
+
+import (
+	"math"
+
+	"pastload/profile"
+)
+
+// A Trend is how a quantity changes with depth in a stratum.
+type Trend struct {
+	Slope       float64        `json:"slope_per_m"`        // of the quantity, at the middle of the tested depths
+	LogSlope    profile.Number `json:"log_slope_per_m"`    // of its natural logarithm, where the line is in logarithms
+	RobustSlope profile.Number `json:"robust_slope_per_m"` // Theil–Sen, of the quantity
+	P           float64        `json:"p"`                  // two-sided chance of such a slope where there is none
+	Real        bool           `json:"real"`
+	SD          float64        `json:"residual_sd"` // about the line, of the logarithm where the line is in logarithms
+	From        float64        `json:"from_m"`
+	To          float64        `json:"to_m"`
+	Points      []TrendPoint   `json:"points,omitempty"` // where the trend is real
+	Line        DepthLine      `json:"-"`
+}
+
+// A TrendPoint is the line of a trend and its cautious lines at one depth.
+type TrendPoint struct {
+	Depth        float64        `json:"depth_m"`
+	Value        profile.Number `json:"value"`
+	MeanLow      profile.Number `json:"mean_low"` // confidence band
+	MeanHigh     profile.Number `json:"mean_high"`
+	FractileLow  profile.Number `json:"fractile_low"` // prediction band
+	FractileHigh profile.Number `json:"fractile_high"`
+	ShiftedLow   profile.Number `json:"shifted_mean_low"` // parallel line
+	ShiftedHigh  profile.Number `json:"shifted_mean_high"`
+}
+
+// parameter computes everything of a parameter but what the engineer adopted.
+func (o Options) parameter(q *quantity, edition Edition, boreholes []string, readings []reading) (Parameter, error) {
+	p := Parameter{
+		Parameter: q.name, Symbol: q.symbol, Unit: q.unit, Key: q.key, Origin: q.origin,
+		Side: q.side(), Governs: q.governs, Alternatives: []Alternative{}, Warnings: []string{},
+	}
+	if p.Origin == "" {
+		p.Origin = Measured
+	}
+	var used, all Sample
+	for _, r := range readings {
+		switch {
+		case r.assumed:
+			p.Assumed++
+			continue
+		case r.bound != profile.Exact:
+			p.Bounds++
+			continue
+		}
+		all = append(all, r.Observation)
+		if r.leftOut {
+			p.LeftOut++
+			continue
+		}
+		used = append(used, r.Observation)
+	}
+	var err error
+	if p.Summary, err = Summarize(used); err != nil {
+		return p, err
+	}
+	if p.LeftOut > 0 {
+		with, err := Summarize(all)
+		if err != nil {
+			return p, err
+		}
+		p.WithLeftOut = &with
+	}
+	p.Observations = append([]Observation{}, byBorehole(used, boreholes)...)
+	e := o.evaluate(q, used)
+	p.Distribution = e.Distribution.String()
+	p.fill(e)
+	p.advise(o, edition, e)
+	p.Reason = p.MethodReason
+	p.warn(o, e)
+	return p, nil
+}
+
+// An evaluation is a sample with what the formulas need of it.
+type evaluation struct {
+	Assumptions
+	q       *quantity
+	sample  Sample
+	scaled  Sample // on the working scale
+	flat    Sample // residuals where the trend is real, else scaled
+	line    *DepthLine
+	scale   float64 // of fluctuation, m
+	count   float64 // effective
+	average float64 // m
+	forced  bool    // a log-normal quantity with a value of zero or less
+}
+
+func (o Options) evaluate(q *quantity, s Sample) evaluation {
+	e := evaluation{q: q, sample: s, scale: o.ScaleOfFluctuation, average: o.AverageOver}
+	e.Distribution, e.COV, e.IndicatedCOV = q.distribution, q.cov, q.annexCOV
+	var err error
+	if e.scaled, err = s.onScale(e.Distribution); err != nil {
+		e.Distribution, e.scaled, e.forced = Normal, s, true
+	}
+	if !(e.scale > 0) {
+		e.scale = q.scale
+	}
+	if n, err := EffectiveCount(s, e.scale); err == nil {
+		e.count = n
+		if o.EffectiveCount {
+			e.Count = n
+		}
+	}
+	e.flat = e.scaled
+	if line, err := FitLine(s, e.Distribution); err == nil {
+		e.line = &line
+		if line.Real() {
+			e.flat = line.residuals(e.scaled)
+		}
+	}
+	return e
+}
+
+// number returns v as known where it is finite and possible for the quantity.
+func (e *evaluation) number(v float64) profile.Number {
+	if math.IsNaN(v) || math.IsInf(v, 0) || v <= 0 && !e.q.signed {
+		return profile.Number{}
+	}
+	return profile.Known(v)
+}
+
+// fill puts the ways, the trend and the correlation of the sample in p.
+func (p *Parameter) fill(e evaluation) {
+	if p.N == 0 {
+		return
+	}
+	if e.q.cov > 0 {
+		p.AssumedCOV, p.COVSource = profile.Known(e.q.cov), e.q.covSource
+	}
+	p.EffectiveN, p.Scale = profile.Known(e.count), profile.Known(e.scale)
+	p.ScaleAssumed = e.scale == e.q.scale
+	if sd, err := RobustSD(e.sample); err == nil {
+		p.RobustSD = profile.Known(sd)
+	}
+	for _, w := range Ways {
+		i, err := w.Of(e.sample, e.Assumptions)
+		if err != nil {
+			continue
+		}
+		p.Alternatives = append(p.Alternatives, e.alternative(w.ID, w.Name, w.Estimate, i, w.Source, w.Mark))
+	}
+	if e.average > 0 {
+		if i, err := AverageOver(e.sample, e.Distribution, e.average, e.scale); err == nil {
+			name := "average over " + metres(e.average)
+			p.Alternatives = append(p.Alternatives, e.alternative("spatial-average", name, Mean, i, "after Vanmarcke 1977", MarkDerived))
+		}
+	}
+	if e.line == nil {
+		return
+	}
+	p.Trend = e.trend()
+	if e.line.N >= fewValues {
+		p.Alternatives = append(p.Alternatives, e.lines()...)
+	}
+	p.Looks = looksOf(e)
+}
+
+// alternative makes a row of what a way gives, with impossible values not known.
+func (e *evaluation) alternative(id, name string, estimate Estimate, i Interval, source, mark string) Alternative {
+	a := Alternative{ID: id, Method: name, Estimate: estimate.String(), Low: e.number(i.Low), High: e.number(i.High), Source: source, Mark: mark}
+	if !a.Low.Known && i.Low <= 0 {
+		a.Note = "the low value comes out at zero or less, which cannot be: the scatter is too great for this form"
+	}
+	return a
+}
+
+// lines gives the ways that follow the depth, at the middle of the tested depths.
+func (e *evaluation) lines() []Alternative {
+	l := e.line
+	depth := l.From + (l.To-l.From)/2
+	var out []Alternative
+	for _, w := range []struct {
+		id, name string
+		estimate Estimate
+		of       func(float64, Estimate) (Interval, error)
+		source   string
+		mark     string
+	}{
+		{"line-mean", "regression line, 95 % confidence band", Mean, l.Band, "Frank et al. 2004", MarkMemory},
+		{"line-fractile", "regression line, 95 % prediction band", Fractile, l.Band, "Frank et al. 2004", MarkMemory},
+		{"shifted-mean", "regression line shifted by k_n·s, mean", Mean, l.Shifted, "Bond 2011", MarkRead},
+		{"shifted-fractile", "regression line shifted by k_n·s, fractile", Fractile, l.Shifted, "Bond 2011", MarkRead},
+	} {
+		i, err := w.of(depth, w.estimate)
+		if err != nil {
+			continue
+		}
+		a := e.alternative(w.id, w.name+", at "+metres(depth), w.estimate, i, w.source, w.mark)
+		if !l.Real() {
+			a.Note = "the slope is not real: a constant is used"
+		}
+		out = append(out, a)
+	}
+	return out
+}
+
+// trend describes the line, with a table of it where it is real.
+func (e *evaluation) trend() *Trend {
+	l := *e.line
+	middle := l.From + (l.To-l.From)/2
+	t := &Trend{Slope: l.SlopeAt(middle), P: l.P, Real: l.Real(), SD: l.SD, From: l.From, To: l.To, Line: l}
+	if l.Distribution == LogNormal {
+		t.LogSlope = profile.Known(l.Slope)
+	}
+	if slope, _, err := TheilSen(e.sample); err == nil {
+		t.RobustSlope = profile.Known(slope)
+	}
+	if !t.Real {
+		return t
+	}
+	for _, z := range depthsBetween(l.From, l.To) {
+		mean, _ := l.Band(z, Mean)
+		fractile, _ := l.Band(z, Fractile)
+		shifted, _ := l.Shifted(z, Mean)
+		t.Points = append(t.Points, TrendPoint{
+			Depth: z, Value: e.number(l.At(z)),
+			MeanLow: e.number(mean.Low), MeanHigh: e.number(mean.High),
+			FractileLow: e.number(fractile.Low), FractileHigh: e.number(fractile.High),
+			ShiftedLow: e.number(shifted.Low), ShiftedHigh: e.number(shifted.High),
+		})
+	}
+	return t
+}
+
+// depthsBetween returns both ends and the half metres between them, or a hundred
+// equal steps where that would be more.
+func depthsBetween(from, to float64) []float64 {
+	step := math.Max(0.5, (to-from)/100)
+	depths := []float64{from}
+	for k := math.Floor(from/step) + 1; k*step < to-1e-9; k++ {
+		if z := k * step; z > from+1e-9 {
+			depths = append(depths, z)
+		}
+	}
+	return append(depths, to)
+}
+
+// looksOf returns the values to look at again, with their own values and not the
+// residuals that the rules worked on.
+func looksOf(e evaluation) []Look {
+	looks := Looks(e.flat)
+	for i := range looks {
+		if e.Distribution == LogNormal || e.line.Real() {
+			for _, o := range e.sample {
+				if o.Borehole == looks[i].Borehole && o.Depth == looks[i].Depth && o.Label == looks[i].Label && e.flatOf(o) == looks[i].Value {
+					looks[i].Observation = o
+					break
+				}
+			}
+		}
+	}
+	return looks
+}
+
+// flatOf returns an observation as it is in e.flat.
+func (e *evaluation) flatOf(o Observation) float64 {
+	v := o.Value
+	if e.Distribution == LogNormal {
+		v = math.Log(v)
+	}
+	if e.line.Real() {
+		v -= e.line.at(o.Depth)
+	}
+	return v
+}

@@ -1,0 +1,151 @@
+package design
+
+import (
+	"fmt"
+	"math"
+)
+
+// A DepthLine is a least-squares line of a quantity with depth, on its working scale:
+//
+//	x(z) = Mean + Slope·(z − MeanDepth)
+//
+// Weights enter as weights of the squared residuals, scaled to a mean of one.
+type DepthLine struct {
+	N            int
+	Distribution Distribution
+	Mean         float64 // of the values, on the working scale
+	MeanDepth    float64 // m
+	Slope        float64 // working scale per m
+	SD           float64 // √(Σr²/(n − 2)), working scale
+	Spread       float64 // Szz = Σ(z − MeanDepth)², m²
+	From, To     float64 // tested depths, m
+	P            float64 // two-sided chance of so steep a slope where there is none
+}
+
+// RealSlope is the chance below which a slope is taken as real. Choice of this
+// program: with a handful of tests a 5 % test would hide most trends.
+const RealSlope = 0.1
+
+// FitLine returns the least-squares line through a sample. The errors wrap
+// ErrTooFew for fewer than three values or depths that do not differ, and
+// ErrOutOfRange where a log-normal quantity is not greater than zero.
+func FitLine(s Sample, d Distribution) (DepthLine, error) {
+	scaled, err := s.onScale(d)
+	if err != nil {
+		return DepthLine{}, err
+	}
+	if len(s) < 3 {
+		return DepthLine{}, fmt.Errorf("%w: %d for a line with depth; want 3", ErrTooFew, len(s))
+	}
+	scaled = scaled.ordered()
+	l := DepthLine{N: len(s), Distribution: d, From: math.Inf(1), To: math.Inf(-1)}
+	var w float64
+	for _, o := range scaled {
+		w += o.weight()
+		l.Mean += o.weight() * o.Value
+		l.MeanDepth += o.weight() * o.Depth
+		l.From, l.To = math.Min(l.From, o.Depth), math.Max(l.To, o.Depth)
+	}
+	l.Mean, l.MeanDepth = l.Mean/w, l.MeanDepth/w
+	if l.To-l.From <= 1e-9*math.Max(1, math.Abs(l.To)) {
+		return DepthLine{}, fmt.Errorf("%w: all %d values are at one depth", ErrTooFew, len(s))
+	}
+	scale := float64(len(s)) / w
+	var cross, total float64
+	for _, o := range scaled {
+		dz, dx := o.Depth-l.MeanDepth, o.Value-l.Mean
+		l.Spread += scale * o.weight() * dz * dz
+		cross += scale * o.weight() * dz * dx
+		total += scale * o.weight() * dx * dx
+	}
+	l.Slope = cross / l.Spread
+	var squares float64
+	for _, o := range scaled {
+		r := o.Value - l.Mean - l.Slope*(o.Depth-l.MeanDepth)
+		squares += scale * o.weight() * r * r
+	}
+	df := float64(len(s) - 2)
+	l.SD = math.Sqrt(squares / df)
+	l.P = slopeChance(l, total, df)
+	return l, nil
+}
+
+// slopeChance returns the two-sided chance of the slope. Values that are equal
+// but for rounding have no slope, and a line through every value has no chance.
+func slopeChance(l DepthLine, total, df float64) float64 {
+	const rounding = 1e-24 // (1e-12)²: twelve digits of the values
+	size := float64(l.N) * l.Mean * l.Mean
+	switch {
+	case total <= rounding*size || l.Slope == 0:
+		return 1
+	case l.SD == 0:
+		return 0
+	}
+	return 2 * studentTail(math.Abs(l.Slope)*math.Sqrt(l.Spread)/l.SD, df)
+}
+
+// Real reports whether the slope is taken as real: at least four values and P
+// below RealSlope.
+func (l DepthLine) Real() bool { return l.N >= fewValues && l.P < RealSlope }
+
+// at returns the line on the working scale.
+func (l DepthLine) at(depth float64) float64 { return l.Mean + l.Slope*(depth-l.MeanDepth) }
+
+// At returns the line at a depth, as the quantity.
+func (l DepthLine) At(depth float64) float64 { return l.Distribution.back(l.at(depth)) }
+
+// SlopeAt returns the change of the quantity per metre at a depth.
+func (l DepthLine) SlopeAt(depth float64) float64 {
+	if l.Distribution == LogNormal {
+		return l.Slope * l.At(depth)
+	}
+	return l.Slope
+}
+
+// Band returns the cautious low and high line at a depth (Frank et al. 2004,
+// formula from memory, unverified; standard regression theory):
+//
+//	mean      x(z) ∓ t95(n−2)·s·√(1/n + (z − z̄)²/Szz)        confidence band
+//	fractile  x(z) ∓ t95(n−2)·s·√(1 + 1/n + (z − z̄)²/Szz)    prediction band
+//
+// The error wraps ErrOutOfRange beyond the tested depths, where the line knows
+// nothing.
+func (l DepthLine) Band(depth float64, e Estimate) (Interval, error) {
+	dz := depth - l.MeanDepth
+	inside := 1/float64(l.N) + dz*dz/l.Spread
+	if e == Fractile {
+		inside++
+	}
+	return l.around(depth, math.Sqrt(inside))
+}
+
+// Shifted returns the line moved parallel to itself by k_n·s (Bond 2011), with
+// k_n = t95(n−2)·√(1/n), or √(1 + 1/n) for a fractile. The degrees of freedom
+// are those of the residuals of a line. The error is as for Band.
+func (l DepthLine) Shifted(depth float64, e Estimate) (Interval, error) {
+	inside := 1 / float64(l.N)
+	if e == Fractile {
+		inside++
+	}
+	return l.around(depth, math.Sqrt(inside))
+}
+
+// around returns the interval of half-width k·t95·s about the line.
+func (l DepthLine) around(depth, k float64) (Interval, error) {
+	if !(depth >= l.From && depth <= l.To) {
+		return Interval{}, fmt.Errorf("%w: %.2f m lies beyond the tests at %.2f to %.2f m", ErrOutOfRange, depth, l.From, l.To)
+	}
+	half := k * Student95(float64(l.N-2)) * l.SD
+	x := l.at(depth)
+	return Interval{l.Distribution.back(x - half), l.Distribution.back(x + half)}, nil
+}
+
+// residuals returns what is left of a sample on the working scale without the
+// line.
+func (l DepthLine) residuals(scaled Sample) Sample {
+	r := append(Sample(nil), scaled...)
+	for i := range r {
+		r[i].Value -= l.at(r[i].Depth)
+	}
+	return r
+}

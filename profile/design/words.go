@@ -1,0 +1,54 @@
+package design
+
+import (
+	"fmt"
+	"math"
+	"strconv"
+	"strings"
+)
+
+// number writes a value with three significant figures and no exponent.
+func number(v float64) string {
+	if v == 0 || math.Abs(v) < 1e-6 {
+		return "0"
+	}
+	digits := max(0, min(2-int(math.Floor(math.Log10(math.Abs(v)))), 8))
+	return strconv.FormatFloat(v, 'f', digits, 64)
+}
+
+// quantityText writes a value with its unit.
+func quantityText(v float64, unit string) string {
+	switch unit {
+	case "":
+		return number(v)
+	case "kN/m3":
+		unit = "kN/m³"
+	}
+	return number(v) + " " + unit
+}
+
+func metres(v float64) string { return strconv.FormatFloat(v, 'f', 2, 64) + " m" }
+
+// chance writes a chance without pretending to more than it knows.
+func chance(p float64) string {
+	if p < 0.001 {
+		return "below 0.001"
+	}
+	return strconv.FormatFloat(p, 'g', 2, 64)
+}
+
+// values writes "one value is" or "5 values are".
+func values(n int, one, more string) string {
+	if n == 1 {
+		return "one value " + one
+	}
+	return fmt.Sprintf("%d values %s", n, more)
+}
+
+// sentence begins a text with a capital.
+func sentence(s string) string {
+	if s == "" {
+		return s
+	}
+	return strings.ToUpper(s[:1]) + s[1:]
+}
