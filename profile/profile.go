@@ -6,39 +6,46 @@ import "encoding/json"
 const Schema = 1
 
 // A Range is a value with its 5 and 95 % points. The zero Range is not known
-// and is null in JSON. A Range with one known side is a bound: see Test.Bound.
+// and is null in JSON. A Range that is a bound has its three values at the bound
+// and says on which side the truth lies: JSON then gives that side alone, so that
+// no reader takes the bound for a value.
 type Range struct {
 	Low, Best, High float64
 	Known           bool
+	Bound           Bound
 }
 
 // Around returns a known range.
-func Around(low, best, high float64) Range { return Range{low, best, high, true} }
-
-// Single returns a known range without width.
-func Single(v float64) Range { return Range{v, v, v, true} }
-
-// Scale returns the range times a factor greater than zero.
-func (r Range) Scale(f float64) Range { return Range{r.Low * f, r.Best * f, r.High * f, r.Known} }
-
-// Shift returns the range with d added.
-func (r Range) Shift(d float64) Range {
-	if !r.Known {
-		return r
-	}
-	return Range{r.Low + d, r.Best + d, r.High + d, true}
+func Around(low, best, high float64) Range {
+	return Range{Low: low, Best: best, High: high, Known: true}
 }
 
-// MarshalJSON writes {"low":…,"best":…,"high":…}, or null where not known.
+// Single returns a known range without width.
+func Single(v float64) Range { return Around(v, v, v) }
+
+// BoundAt returns a bound.
+func BoundAt(v float64, side Bound) Range {
+	return Range{Low: v, Best: v, High: v, Known: true, Bound: side}
+}
+
+// MarshalJSON writes {"low":…,"best":…,"high":…}, or null where not known. Of a
+// bound it writes the low (at least) or the high (at most) alone.
 func (r Range) MarshalJSON() ([]byte, error) {
 	if !r.Known {
 		return []byte("null"), nil
 	}
+	low, best, high := &r.Low, &r.Best, &r.High
+	switch r.Bound {
+	case AtLeast:
+		best, high = nil, nil
+	case AtMost:
+		low, best = nil, nil
+	}
 	return json.Marshal(struct {
-		Low  float64 `json:"low"`
-		Best float64 `json:"best"`
-		High float64 `json:"high"`
-	}{r.Low, r.Best, r.High})
+		Low  *float64 `json:"low"`
+		Best *float64 `json:"best"`
+		High *float64 `json:"high"`
+	}{low, best, high})
 }
 
 // MarshalJSON writes the value, or null where it is not known.
@@ -52,6 +59,7 @@ func (n Number) MarshalJSON() ([]byte, error) {
 // A Profile is what Build makes of a Site.
 type Profile struct {
 	Site      *Site             `json:"-"`
+	Specimens []Specimen        `json:"-"` // every curve interpreted
 	Boreholes []BoreholeProfile `json:"boreholes"`
 }
 
@@ -85,6 +93,8 @@ type Point struct {
 	Zone                 Zone             `json:"zone,omitempty"`
 	ZoneProbability      map[Zone]float64 `json:"zone_probability,omitempty"`
 	CompressionIndex     Range            `json:"compression_index"`
+
+	stratum int // index into the borehole's strata
 }
 
 // The verdicts on a test, from what the rest of the ground expects there.
@@ -108,6 +118,7 @@ type Test struct {
 	POP              Number  `json:"pop_kPa"`
 	Grade            string  `json:"grade"` // A, B, C, "bound only", or "not graded"
 	Used             bool    `json:"used"`
+	LeftOut          bool    `json:"left_out"`      // by a decision of the engineer
 	Why              string  `json:"why,omitempty"` // which value is used, or why none is
 	Laboratory       Range   `json:"laboratory_kPa"`
 	Interpreted      Range   `json:"interpreted_kPa"`
@@ -116,6 +127,7 @@ type Test struct {
 	Verdict          string  `json:"verdict,omitempty"`
 	Result           *Result `json:"-"` // nil where only a curve gives it
 	Curve            *Curve  `json:"-"` // nil where only the laboratory gives it
+	specimen         *Specimen
 }
 
 // MarshalJSON writes "", "at least" or "at most".

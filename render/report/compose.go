@@ -1,0 +1,209 @@
+package report
+
+import (
+	"fmt"
+	"strings"
+
+	"pastload/profile"
+)
+
+// A Figures set is the drawings of a report.
+type Figures struct {
+	Depth  []Figure // one for each borehole, in order
+	Curves []Figure // one for each oedometer test
+	Other  []Figure
+}
+
+// Compose arranges a report on a site in the order in which its reader asks:
+// what is the finding, what does it rest on, where is the ground and its water,
+// how loaded today, how loaded in the past, which tests to doubt, what was
+// supposed, and who answers for it.
+func Compose(p *profile.Profile, figures Figures) *Document {
+	s := p.Site
+	t := s.Settings.Title
+	d := &Document{Title: orElse(t.Title, "Stress history of the ground"), Subtitle: subtitle(s), Running: running(t), Fields: fields(t)}
+	d.add("summary", "Findings in short", summaryBlocks(p)...)
+	d.add("basis", "Basis and definitions", basis(s)...)
+	d.add("ground", "Ground and water", Layers(s), Water(s))
+	for i := range figures.Depth {
+		d.add(figures.Depth[i].ID+"-drawing", figures.Depth[i].Caption, figures.Depth[i])
+	}
+	if len(figures.Other) > 0 {
+		d.add("overview", "The site on one sheet", blocks(figures.Other)...)
+	}
+	for i := range p.Boreholes {
+		b := &p.Boreholes[i]
+		d.add(fmt.Sprintf("profile-%d", i+1), "Stress history with depth: "+b.Borehole, profileBlocks(b)...)
+	}
+	d.add("tests", "Preconsolidation tests", testBlocks(p, figures.Curves)...)
+	d.add("compression", "Compressibility", Compression(p.Boreholes...))
+	d.add("results", "Results as read", Results(s))
+	d.add("assumptions", "Assumptions and limitations", limitations(p)...)
+	d.add("sources", "Tables read", sourceBlocks(s)...)
+	d.add("cautions", "Cautions", List(cautions))
+	d.add("sign-off", "Sign-off", signOff(t))
+	return d
+}
+
+// add appends a section, leaving out tables without rows; a section without
+// blocks is left out whole.
+func (d *Document) add(id, title string, bs ...Block) {
+	var kept []Block
+	for _, b := range bs {
+		switch b := b.(type) {
+		case *Table:
+			if len(b.Rows) == 0 {
+				continue
+			}
+		case List:
+			if len(b) == 0 {
+				continue
+			}
+		}
+		kept = append(kept, b)
+	}
+	if len(kept) > 0 {
+		d.Sections = append(d.Sections, Section{id, title, kept})
+	}
+}
+
+func blocks(fs []Figure) []Block {
+	var out []Block
+	for _, f := range fs {
+		out = append(out, f)
+	}
+	return out
+}
+
+func orElse(s, other string) string {
+	if s == "" {
+		return other
+	}
+	return s
+}
+
+func subtitle(s *profile.Site) string {
+	t := s.Settings.Title
+	return strings.Join(nonEmpty(t.Project, t.Location), ", ")
+}
+
+func running(t profile.TitleBlock) string {
+	rev := ""
+	if t.Revision != "" {
+		rev = "revision " + t.Revision
+	}
+	return strings.Join(nonEmpty(t.Number, rev, t.Status, t.Date), "  ")
+}
+
+func nonEmpty(ss ...string) []string {
+	var out []string
+	for _, s := range ss {
+		if s != "" {
+			out = append(out, s)
+		}
+	}
+	return out
+}
+
+func fields(t profile.TitleBlock) []Field {
+	return []Field{
+		{"Project", t.Project}, {"Location", t.Location}, {"Client", t.Client}, {"Organisation", t.Organisation},
+		{"Document number", t.Number}, {"Revision", t.Revision}, {"Status", t.Status}, {"Date", t.Date},
+		{"Prepared by", t.PreparedBy}, {"Checked by", t.CheckedBy}, {"Approved by", t.ApprovedBy},
+		{"Datum", t.Datum}, {"Coordinates", t.Coordinates},
+	}
+}
+
+func summaryBlocks(p *profile.Profile) []Block {
+	var out []Block
+	for i := range p.Boreholes {
+		b := &p.Boreholes[i]
+		sentences := Summary(b)
+		if len(sentences) == 0 {
+			out = append(out, Paragraph(b.Borehole+": no stress history; see the notes."))
+			continue
+		}
+		out = append(out, Paragraph(b.Borehole+":"), List(sentences))
+	}
+	return out
+}
+
+func basis(s *profile.Site) []Block {
+	l := s.Settings.Limits
+	out := []Block{
+		Paragraph("σv0 is the total vertical stress, u0 the pore water pressure and σ′v0 = σv0 − u0 the effective vertical stress of today. σ′p is the preconsolidation (yield) stress, OCR = σ′p/σ′v0 the overconsolidation ratio and POP = σ′p − σ′v0 the pre-overburden pressure. Cc, Cr and Cs are slopes of void ratio per tenfold of effective stress."),
+		Paragraph(fmt.Sprintf("Zones by OCR, as this project defines them (sources differ): underconsolidated (suspected) below %s; normally consolidated from %s; lightly overconsolidated from %s; heavily overconsolidated from %s. A zone is given with its probability; where the band straddles a limit both names are given.",
+			trim(l.NormallyConsolidated), trim(l.NormallyConsolidated), trim(l.LightlyOverconsolidated), trim(l.HeavilyOverconsolidated))),
+		Paragraph(fmt.Sprintf("The unit weight of water is %.2f kN/m³. Low, best and high are the 5, 50 and 95 %% points. The effective stress is taken as uncertain by %.0f %% of the weight of the ground and by %.2f m of water level (one standard deviation), which is carried into OCR.",
+			s.Settings.WaterUnitWeight, 100*s.Settings.UnitWeightUncertainty, s.Settings.WaterLevelUncertainty)),
+	}
+	settings := &Table{Name: "settings", Title: "Settings as given", Columns: []Column{
+		{"setting", "setting", Words, 0}, {"value", "value", Words, 0}, {"unit", "unit", Words, 0}, {"note", "note", Words, 0},
+	}}
+	for _, g := range s.Settings.Given {
+		settings.Add(T(g.Name), T(g.Value), T(g.Unit), T(g.Note))
+	}
+	return append(out, settings)
+}
+
+// trim writes a limit without trailing zeros.
+func trim(v float64) string { return strings.TrimRight(strings.TrimRight(fixed(v, 3), "0"), ".") }
+
+func profileBlocks(b *profile.BoreholeProfile) []Block {
+	points := Points(*b).Only("depth", "stratum", "unit_weight", "total_stress", "pore_pressure", "effective_stress",
+		"preconsolidation_stress_low", "preconsolidation_stress", "preconsolidation_stress_high", "ocr_low", "ocr", "ocr_high", "pop", "zone", "zone_probability")
+	return []Block{
+		Zones(*b).Without("borehole"),
+		Strata(*b).Without("borehole"),
+		points.Named("Stresses and stress history with depth, " + b.Borehole),
+		List(b.Notes),
+	}
+}
+
+func testBlocks(p *profile.Profile, curves []Figure) []Block {
+	tests := Tests(p.Boreholes...)
+	out := []Block{
+		tests.Only("borehole", "depth", "specimen", "stratum", "effective_stress", "bound", "preconsolidation_stress", "preconsolidation_stress_low",
+			"preconsolidation_stress_high", "laboratory", "ocr", "grade", "expected", "expected_low", "expected_high", "z", "verdict"),
+		tests.Only("borehole", "depth", "specimen", "used", "why").Named("Which value is used, and why"),
+	}
+	return append(out, blocks(curves)...)
+}
+
+func limitations(p *profile.Profile) []Block {
+	var notes List
+	for _, n := range p.Site.Notes {
+		notes = append(notes, strings.TrimPrefix(n.Where+": "+n.Message, ": "))
+	}
+	return []Block{
+		Assumptions(p.Boreholes...),
+		notes,
+	}
+}
+
+func sourceBlocks(s *profile.Site) []Block {
+	return []Block{
+		Sources(s),
+		Paragraph("A number in these pages comes from the table, line and column that the results table names; the sums above tell whether a file has changed since."),
+	}
+}
+
+// cautions are the usual ones of the trade.
+var cautions = []string{
+	"This is an interpretation of tests on small specimens. It is for use by, and under the responsibility of, an engineer licensed to practise where the work is, and gives way to local codes and to the requirements of the authorities.",
+	"Ground between boreholes is not known. Layers, water and stress history can change within metres.",
+	"Disturbance of specimens lowers the preconsolidation stress that a test shows, and the method and rate of the test shift it by 10 to 30 % (common practice); values of different kinds of test are not the same quantity.",
+	"Correlations give a rough check and no substitute for tests. Those whose coefficients were not read in their source are marked as such and must be checked before they are relied on.",
+	"A low value is not always the safe one: heave, downdrag, wall pressure and drivability ask for the high one.",
+	"An overconsolidation ratio below one is either ground that still settles or a disturbed specimen, a wrong water level or a wrong unit weight. Measure the pore pressure before choosing between them.",
+}
+
+func signOff(t profile.TitleBlock) *Table {
+	s := &Table{Name: "sign-off", Title: "Prepared, checked, approved", Columns: []Column{
+		{"role", "role", Words, 0}, {"name", "name", Words, 0}, {"signature", "signature", Words, 0}, {"date", "date", Words, 0},
+	}}
+	s.Add(T("prepared"), T(t.PreparedBy), T(""), T(""))
+	s.Add(T("checked"), T(t.CheckedBy), T(""), T(""))
+	s.Add(T("approved"), T(t.ApprovedBy), T(""), T(""))
+	return s
+}

@@ -1,0 +1,109 @@
+package report
+
+import (
+	"crypto/sha256"
+	_ "embed"
+	"encoding/base64"
+	"html/template"
+	"io"
+	"strconv"
+)
+
+//go:embed report.css
+var styleSheet string
+
+//go:embed report.html
+var pageText string
+
+var page = template.Must(template.New("report").Parse(pageText))
+
+// htmlPage is what the template sees.
+type htmlPage struct {
+	*Document
+	Policy   string
+	Style    template.CSS
+	Sections []htmlSection
+}
+
+type htmlSection struct {
+	ID, Number, Title string
+	Blocks            []htmlBlock
+}
+
+// htmlBlock has one of its fields set.
+type htmlBlock struct {
+	Paragraph string
+	List      []string
+	Table     *htmlTable
+	Figure    *htmlFigure
+}
+
+type htmlTable struct {
+	Title, Note string
+	Wide        bool
+	Heads       []htmlCell
+	Rows        [][]htmlCell
+}
+
+type htmlCell struct {
+	Text    string
+	Numeric bool
+}
+
+type htmlFigure struct {
+	Figure
+	Drawing template.HTML
+}
+
+// wideFrom is the number of columns from which a table is printed across the page.
+const wideFrom = 10
+
+// WriteHTML writes the document as one page that needs nothing else: no script,
+// no font, no picture from outside. Its content policy allows its own style
+// sheet, by hash, and nothing more. Drawings are inlined as they are: they must
+// come from the drawing packages, which escape all text.
+func (d *Document) WriteHTML(w io.Writer, u Units) error {
+	sum := sha256.Sum256([]byte(styleSheet + runningFoot(d.Running)))
+	p := htmlPage{
+		Document: d,
+		Policy:   "default-src 'none'; style-src 'sha256-" + base64.StdEncoding.EncodeToString(sum[:]) + "'; img-src data:; base-uri 'none'; form-action 'none'",
+		Style:    template.CSS(styleSheet + runningFoot(d.Running)),
+	}
+	for i, s := range d.Sections {
+		h := htmlSection{ID: s.ID, Number: strconv.Itoa(i + 1), Title: s.Title}
+		for _, b := range s.Blocks {
+			h.Blocks = append(h.Blocks, htmlOf(b, u))
+		}
+		p.Sections = append(p.Sections, h)
+	}
+	return page.Execute(w, p)
+}
+
+func htmlOf(b Block, u Units) htmlBlock {
+	switch b := b.(type) {
+	case Paragraph:
+		return htmlBlock{Paragraph: string(b)}
+	case List:
+		return htmlBlock{List: b}
+	case *Table:
+		return htmlBlock{Table: htmlTableOf(b, u)}
+	case Figure:
+		return htmlBlock{Figure: &htmlFigure{b, template.HTML(inline(b.SVG))}}
+	}
+	panic("report: unknown block")
+}
+
+func htmlTableOf(t *Table, u Units) *htmlTable {
+	h := &htmlTable{Title: t.Title, Note: t.Note, Wide: len(t.Columns) >= wideFrom}
+	for _, c := range t.Columns {
+		h.Heads = append(h.Heads, htmlCell{c.Heading(u), c.numeric()})
+	}
+	for _, r := range t.Rows {
+		row := make([]htmlCell, len(r))
+		for i, c := range r {
+			row[i] = htmlCell{visible(t.Columns[i].Format(c, u)), t.Columns[i].numeric()}
+		}
+		h.Rows = append(h.Rows, row)
+	}
+	return h
+}
