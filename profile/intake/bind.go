@@ -1,0 +1,254 @@
+package intake
+
+import (
+	"fmt"
+	"strconv"
+	"strings"
+)
+
+// bind matches the header of a grid with the columns of its table and reports
+// what is missing, repeated, unknown or without a unit. A row of units beneath
+// the header is taken off the grid.
+func (rd *reader) bind(g *grid, specs []spec) (fields []field, index map[string]int, sound bool) {
+	v := newVocabulary(specs)
+	index = map[string]int{}
+	header := g.header
+	report := func(i int, name, message, wanted string) {
+		rd.add(Problem{File: g.file, Line: header.lineOf(i), Column: i + 1, Name: name, Message: message, Wanted: wanted})
+	}
+	for i, h := range trimRight(header.fields) {
+		f := v.bindField(h, i+1)
+		if f.header == "CR" {
+			report(i, "CR", "can be the recompression index Cr or the compression ratio Cc/(1 + e0)", `"recompression index", or the compression index "Cc"`)
+			f.spec = -1
+		} else if f.spec < 0 {
+			rd.unknownColumn(g, i, f, specs)
+		}
+		if f.spec >= 0 {
+			name := specs[f.spec].name
+			if j, ok := index[name]; ok {
+				report(i, name, fmt.Sprintf("column %q is given again, field %d holds it as %q", f.header, j+1, fields[j].header), "one column for each quantity")
+				f.spec = -1
+			} else {
+				index[name] = i
+			}
+		}
+		fields = append(fields, f)
+	}
+	units := takeUnitRow(g, specs, fields)
+	for i := range fields {
+		rd.bindUnit(g, specs, &fields[i], units)
+	}
+	sound = true
+	for _, s := range specs {
+		if _, ok := index[s.name]; s.required && !ok {
+			sound = false
+			rd.add(Problem{File: g.file, Line: max(header.line, 1), Name: s.name, Message: "no such column", Wanted: fmt.Sprintf("a column %q", s.title())})
+		}
+	}
+	return fields, index, sound
+}
+
+// trimRight drops the empty fields that spreadsheets leave at the end.
+func trimRight(fields []string) []string {
+	n := len(fields)
+	for n > 0 && clean(fields[n-1]) == "" {
+		n--
+	}
+	return fields[:n]
+}
+
+// unknownColumn notes a column that no quantity is known for.
+func (rd *reader) unknownColumn(g *grid, i int, f field, specs []spec) {
+	if f.header == "" {
+		for _, r := range g.rows {
+			if clean(r.field(i)) != "" {
+				rd.add(Problem{File: g.file, Line: g.header.lineOf(i), Column: i + 1, Name: string(g.table),
+					Message: "a column with values has no header", Wanted: "a header for each column"})
+				return
+			}
+		}
+		return
+	}
+	typed := f.header
+	if s := splits(f.header); len(s) > 0 && s[0].sure {
+		typed = s[0].name
+	}
+	message := fmt.Sprintf("column %q is not known and was not used", f.header)
+	if g.table == Results {
+		message = fmt.Sprintf("column %q is not known: its cells are kept as typed and not used", f.header)
+	}
+	if names := nearSpecs(typed, specs); len(names) > 0 {
+		message += "; near it: " + quoted(names)
+	}
+	rd.note(fmt.Sprintf("%s:%d:%d", g.file, g.header.lineOf(i), i+1), message)
+}
+
+// nearSpecs returns the columns that a name may have meant.
+func nearSpecs(typed string, specs []spec) []string {
+	var all, out []string
+	owner := map[string]string{}
+	for _, s := range specs {
+		for _, n := range s.names() {
+			all = append(all, n)
+			owner[n] = s.name
+		}
+	}
+	seen := map[string]bool{}
+	for _, n := range near(typed, all) {
+		if name := owner[n]; !seen[name] {
+			seen[name] = true
+			out = append(out, name)
+		}
+	}
+	return out
+}
+
+// takeUnitRow takes a row of units off the top of the grid and returns it.
+func takeUnitRow(g *grid, specs []spec, fields []field) *gridRow {
+	if len(g.rows) == 0 {
+		return nil
+	}
+	first := g.rows[0]
+	found := false
+	for i, f := range fields {
+		text := clean(first.field(i))
+		isUnit := false
+		if text != "" {
+			_, isUnit = unitElsewhere(text)
+		}
+		if f.spec >= 0 && specs[f.spec].kind == numberColumn {
+			if scan(text).kind == aNumber {
+				return nil
+			}
+			found = found || isUnit && text != "-"
+			continue
+		}
+		if text != "" && text != "-" && !isUnit && key(text) != "unit" && key(text) != "units" {
+			return nil
+		}
+	}
+	if !found {
+		return nil
+	}
+	g.rows = g.rows[1:]
+	return &first
+}
+
+// bindUnit settles the unit of one field, from its header or the unit row.
+func (rd *reader) bindUnit(g *grid, specs []spec, f *field, units *gridRow) {
+	line, at := g.header.lineOf(f.place-1), "in the header"
+	if units != nil {
+		if text := clean(units.field(f.place - 1)); text != "" && key(text) != "unit" && key(text) != "units" {
+			if f.unitText == "" {
+				f.unitText, line, at = text, units.lineOf(f.place-1), "in the row of units"
+			} else if unitKey(text) != unitKey(f.unitText) && f.spec >= 0 {
+				rd.add(Problem{File: g.file, Line: units.lineOf(f.place - 1), Column: f.place, Name: specs[f.spec].name,
+					Message: fmt.Sprintf("unit %q beneath a header that says %q", text, f.unitText), Wanted: "one unit"})
+			}
+		}
+	}
+	if f.spec < 0 {
+		return
+	}
+	s := specs[f.spec]
+	report := func(message, wanted string) {
+		rd.add(Problem{File: g.file, Line: line, Column: f.place, Name: s.name, Message: message, Wanted: wanted})
+	}
+	switch {
+	case s.kind != numberColumn:
+		f.known = true
+	case f.unitText == "" && !s.dim.needsUnit():
+		f.unit, f.known = s.unit, true
+	case f.unitText == "":
+		report("no unit in the header", fmt.Sprintf("%q or another unit of %s: %s", s.title(), s.dim.name, s.dim.list()))
+	default:
+		u, ok := s.dim.find(f.unitText)
+		if ok {
+			f.unit, f.known = u, true
+			rd.noteConversion(g, s, *f)
+			return
+		}
+		if other, ok := unitElsewhere(f.unitText); ok {
+			report(fmt.Sprintf("%q %s is a unit of %s", f.unitText, at, other), fmt.Sprintf("a unit of %s: %s", s.dim.name, s.dim.list()))
+			return
+		}
+		report(fmt.Sprintf("%q %s is not a known unit", f.unitText, at), fmt.Sprintf("a unit of %s: %s", s.dim.name, s.dim.list()))
+	}
+}
+
+// noteConversion records a factor that was applied to a whole column.
+func (rd *reader) noteConversion(g *grid, s spec, f field) {
+	if f.unit.factor == s.unit.factor {
+		return
+	}
+	note := fmt.Sprintf("%s: %s × %s = %s", s.name, f.unit.name, strconv.FormatFloat(f.unit.factor/s.unit.factor, 'g', 10, 64), s.unit.name)
+	if s.unit.name == "-" {
+		note = strings.TrimSuffix(note, " = -")
+	}
+	if f.unit.note != "" {
+		note += " (" + f.unit.note + ")"
+	}
+	rd.noteFile(g.file, note)
+}
+
+// checkWidths reports rows that are wider or narrower than the header: a row
+// with too few fields has lost one, and nobody knows which.
+func (rd *reader) checkWidths(g *grid, fields []field) []gridRow {
+	width := len(fields)
+	kept := g.rows[:0:0]
+	for _, r := range g.rows {
+		n := len(trimRight(r.fields))
+		switch {
+		case n > width:
+			rd.add(Problem{File: g.file, Line: r.lineOf(width), Column: width + 1, Name: string(g.table),
+				Message: fmt.Sprintf("%d fields under a header of %d", n, width),
+				Wanted:  "one field for each column; a decimal comma between commas needs quotes"})
+		case len(r.fields) < width && !g.sheet:
+			rd.add(Problem{File: g.file, Line: r.line, Column: len(r.fields), Name: string(g.table),
+				Message: fmt.Sprintf("%d fields under a header of %d", len(r.fields), width), Wanted: "one field for each column, blank where nothing was measured"})
+		default:
+			kept = append(kept, r)
+		}
+	}
+	return kept
+}
+
+// decimalMark decides the decimal mark of a file from all its number cells.
+func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []gridRow) byte {
+	if g.point {
+		return '.'
+	}
+	var c census
+	for _, r := range rows {
+		for i, f := range fields {
+			if f.spec < 0 || specs[f.spec].kind == textColumn || specs[f.spec].kind == dateColumn {
+				continue
+			}
+			text := r.field(i)
+			if !strings.ContainsAny(text, ".,'") {
+				continue
+			}
+			add := func(t token) {
+				if t.kind == aNumber {
+					c.add(numeral{line: r.lineOf(i), column: i + 1, name: specs[f.spec].name, text: clean(text), digits: t.digits})
+				}
+			}
+			if top, base, ok := depthRange(text); ok && specs[f.spec].ranges {
+				add(top)
+				add(base)
+				continue
+			}
+			add(scan(text))
+		}
+	}
+	mark, wrong, note := c.decide(rd.opt.Decimal)
+	for _, p := range wrong {
+		p.File = g.file
+		rd.add(p)
+	}
+	if note != "" {
+		rd.noteFile(g.file, note)
+	}
+	return mark
+}

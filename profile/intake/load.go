@@ -1,0 +1,284 @@
+package intake
+
+import (
+	"fmt"
+	"strings"
+
+	"github.com/gocarina/gocsv"
+
+	"pastload/profile"
+)
+
+// A record is a row as it comes out of the CSV layer: the text of every field
+// beside the column it belongs to. Nothing is converted there, so nothing can be
+// guessed there.
+type record struct {
+	Cells []string
+}
+
+// UnmarshalCSVWithFields keeps the text of one field. It never fails: cells are
+// checked afterwards, all of them, where their positions are known.
+func (r *record) UnmarshalCSVWithFields(_, text string) error {
+	r.Cells = append(r.Cells, text)
+	return nil
+}
+
+// tableReader hands a grid to gocsv under canonical column names, every row as
+// wide as the header.
+type tableReader struct {
+	titles []string
+	rows   []gridRow
+	next   int
+}
+
+// Read returns the titles and then one row after the other.
+func (t *tableReader) Read() ([]string, error) {
+	all, err := t.ReadAll()
+	if err != nil || t.next >= len(all) {
+		return nil, gocsv.ErrEmptyCSVFile
+	}
+	t.next++
+	return all[t.next-1], nil
+}
+
+// ReadAll returns the titles and all rows.
+func (t *tableReader) ReadAll() ([][]string, error) {
+	out := make([][]string, 0, len(t.rows)+1)
+	out = append(out, t.titles)
+	for _, r := range t.rows {
+		fields := r.fields
+		if len(fields) > len(t.titles) {
+			fields = fields[:len(t.titles)]
+		}
+		out = append(out, fields)
+	}
+	return out, nil
+}
+
+// A table is a grid whose columns are known and whose cells are read.
+type table[T any] struct {
+	rd     *reader
+	grid   *grid
+	specs  []spec
+	fields []field
+	index  map[string]int // canonical name → field, 0 is the first
+	rows   []row[T]
+	sound  bool // no required column is missing
+	mark   byte // the decimal mark of the file
+}
+
+// A row is a value and where it stands.
+type row[T any] struct {
+	Value T
+	at    gridRow
+}
+
+// has tells whether the table has the column.
+func (t *table[T]) has(name string) bool {
+	if t == nil {
+		return false
+	}
+	_, ok := t.index[name]
+	return ok
+}
+
+// problem reports what is wrong in a cell of a row, or in the row where the
+// table has no such column.
+func (t *table[T]) problem(r row[T], name, message, wanted string) {
+	p := Problem{File: t.grid.file, Line: r.at.line, Name: name, Message: message, Wanted: wanted}
+	if i, ok := t.index[name]; ok {
+		p.Line, p.Column = r.at.lineOf(i), i+1
+	}
+	t.rd.add(p)
+}
+
+// cell returns the position of a cell, or of the row's beginning.
+func (t *table[T]) cell(r row[T], name string) *profile.Cell {
+	c := &profile.Cell{File: t.grid.file, Line: r.at.line, Column: 1}
+	if i, ok := t.index[name]; ok {
+		c.Line, c.Column, c.Text, c.Unit = r.at.lineOf(i), i+1, r.at.field(i), t.fields[i].unitText
+	}
+	return c
+}
+
+// note remarks on a cell without making it a problem.
+func (t *table[T]) note(r row[T], name, message string) {
+	t.rd.note(t.cell(r, name).String(), message)
+}
+
+// load reads a grid into rows of T. It returns nil where there is no such table.
+func load[T any](rd *reader, g *grid, columns []column[T]) *table[T] {
+	if g == nil {
+		return nil
+	}
+	t := &table[T]{rd: rd, grid: g, specs: specs(columns)}
+	t.fields, t.index, t.sound = rd.bind(g, t.specs)
+	titles := make([]string, len(t.fields))
+	for i, f := range t.fields {
+		titles[i] = f.header
+		if f.spec >= 0 {
+			titles[i] = t.specs[f.spec].name
+		}
+	}
+	rows := rd.checkWidths(g, t.fields)
+	var records []record
+	if err := gocsv.UnmarshalCSV(&tableReader{titles: titles, rows: rows}, &records); err != nil {
+		rd.add(Problem{File: g.file, Name: string(g.table), Message: err.Error(), Wanted: "a readable table"})
+		return t
+	}
+	t.mark = rd.decimalMark(g, t.specs, t.fields, rows)
+	t.rows = make([]row[T], len(records))
+	cells := make([]profile.Cell, 0, len(records)*len(t.fields))
+	for i, rec := range records {
+		t.rows[i].at = rows[i]
+		for j, f := range t.fields {
+			if f.spec < 0 || !f.known {
+				continue // reported with the header
+			}
+			text := ""
+			if j < len(rec.Cells) {
+				text = rec.Cells[j]
+			}
+			cells = append(cells, profile.Cell{File: g.file, Line: rows[i].lineOf(j), Column: j + 1, Text: text, Unit: f.unitText})
+			fill(rd, g, columns[f.spec], f, t.mark, &cells[len(cells)-1], &t.rows[i].Value)
+		}
+	}
+	return t
+}
+
+// fill puts one cell into the row.
+func fill[T any](rd *reader, g *grid, c column[T], f field, mark byte, cell *profile.Cell, to *T) {
+	report := func(message, wanted string) {
+		rd.add(Problem{File: cell.File, Line: cell.Line, Column: cell.Column, Name: c.name, Message: message, Wanted: wanted})
+	}
+	if c.kind != numberColumn {
+		text := clean(cell.Text)
+		if missing(text) {
+			text = ""
+		}
+		if c.kind == dateColumn && g.sheet {
+			text = serialDate(text, g.date1904)
+		}
+		if c.required && text == "" {
+			report("blank", "a value in every row")
+		}
+		*c.text(to) = text
+		return
+	}
+	n, base, np, message := readNumber(c.spec, f, mark, cell)
+	if message != "" {
+		report(message, c.wanted(f))
+		return
+	}
+	if np {
+		*c.flag(to) = true
+		return
+	}
+	if c.required && !n.Known {
+		report("blank", c.wanted(f))
+		return
+	}
+	for _, v := range []profile.Number{n, base} {
+		if message, hint := c.outside(v, f); message != "" {
+			report(message, hint)
+			return
+		}
+	}
+	*c.number(to) = n
+	if base.Known {
+		*c.base(to) = base
+	}
+}
+
+// readNumber reads a number cell in the unit of its header. message tells what
+// is wrong with it.
+func readNumber(s spec, f field, mark byte, cell *profile.Cell) (n, base profile.Number, np bool, message string) {
+	shown := fmt.Sprintf("%q ", clean(cell.Text))
+	tok := scan(cell.Text)
+	if s.ranges && tok.kind == notANumber {
+		if top, end, ok := depthRange(cell.Text); ok {
+			a, okA := top.value(mark)
+			b, okB := end.value(mark)
+			if !okA || !okB {
+				return n, base, false, shown + "is not a range of numbers"
+			}
+			if b <= a {
+				return n, base, false, shown + "is a range whose end does not lie below its beginning"
+			}
+			return s.inside(a, f, cell), s.inside(b, f, cell), false, ""
+		}
+	}
+	switch {
+	case tok.kind == notMeasured:
+		return n, base, false, ""
+	case tok.kind == nonPlastic && s.plastic:
+		return n, base, true, ""
+	case tok.kind == nonPlastic:
+		return n, base, false, shown + "is not a number"
+	case tok.kind == notANumber:
+		return n, base, false, shown + tok.why
+	case tok.bound != profile.Exact && !s.bounds:
+		return n, base, false, shown + "is a bound, not a value"
+	case tok.percent && f.unit.name != "%":
+		return n, base, false, shown + "carries a percent sign in a column that is not in percent"
+	}
+	v, ok := tok.value(mark)
+	if !ok {
+		return n, base, false, shown + "is not a number"
+	}
+	n = s.inside(v, f, cell)
+	n.Bound, n.Assumed = tok.bound, tok.assumed
+	return n, base, false, ""
+}
+
+// inside converts a typed value to the unit inside.
+func (s spec) inside(v float64, f field, cell *profile.Cell) profile.Number {
+	return profile.Number{Value: convert(v, f.unit, s.unit), Known: true, Source: cell}
+}
+
+// wanted says what a cell of the column should hold.
+func (s spec) wanted(f field) string {
+	u := f.unit
+	if u.name == "" {
+		u = s.unit
+	}
+	switch {
+	case s.ranges:
+		return fmt.Sprintf("%s, e.g. %s or a range 4.00–4.45", u.words, u.example)
+	case s.dim == ratio && s.limit.set && s.limit.high > 0:
+		return "a number"
+	}
+	return fmt.Sprintf("%s, e.g. %s", u.words, u.example)
+}
+
+// outside tells why a value cannot be right as entered, and which other unit
+// would make it fit.
+func (s spec) outside(n profile.Number, f field) (message, wanted string) {
+	if !n.Known || s.limit.has(n.Value) {
+		return "", ""
+	}
+	u := s.unit.name
+	if u == "-" {
+		u = ""
+	}
+	amount := func(v float64) string { return strings.TrimSpace(number(v) + " " + u) }
+	message = fmt.Sprintf("%q", clean(n.Source.Text))
+	if f.unit.name != s.unit.name {
+		message += " " + f.unit.name + " is " + amount(n.Value) + " and"
+	}
+	typed := convert(n.Value, s.unit, f.unit)
+	message += fmt.Sprintf(" lies outside %s to %s", number(s.limit.low), amount(s.limit.high))
+	if s.limit.open && n.Value <= s.limit.low {
+		message = fmt.Sprintf("%q is not greater than %s", clean(n.Source.Text), number(s.limit.low))
+		return message, fmt.Sprintf("%s greater than %s, or blank where it was not measured", f.unit.words, number(s.limit.low))
+	}
+	for _, other := range s.dim.units {
+		if other.name == f.unit.name || n.Value <= 0 {
+			continue
+		}
+		if v := convert(typed, other, s.unit); s.limit.has(v) {
+			return message, fmt.Sprintf("%s, or the right unit in the header: %s %s would be %s", f.unit.words, number(typed), other.name, amount(v))
+		}
+	}
+	return message, s.wanted(f)
+}

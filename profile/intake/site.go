@@ -1,0 +1,81 @@
+package intake
+
+import (
+	"fmt"
+	"strings"
+
+	"pastload/profile"
+)
+
+// A site is a profile.Site in the making.
+type site struct {
+	rd          *reader
+	out         profile.Site
+	single      bool           // one results file is all there is
+	declared    bool           // a boreholes table says which boreholes exist
+	index       map[string]int // folded name → place in out.Boreholes
+	layered     map[int]bool   // the strata table has rows for the borehole
+	torn        map[int]bool   // some of those rows could not be used
+	resultTable *table[resultRow]
+}
+
+// build turns grids into the site, table by table: what others refer to comes
+// first.
+func (s *site) build(grids map[Table]*grid) {
+	s.settings(grids[Settings])
+	s.boreholes(grids[Boreholes])
+	s.strata(grids[Strata])
+	s.water(grids[Water])
+	s.results(grids[Results])
+	s.layers()
+}
+
+// indexOf returns the field of a column, or one beyond every row.
+func (t *table[T]) indexOf(name string) int {
+	if i, ok := t.index[name]; ok {
+		return i
+	}
+	return maxFields
+}
+
+// openNumber reads a number whose dimension the row decides: s says what it
+// must be, unitText is what the row's own unit cell says, and bare allows no
+// unit at all, which then means the unit inside.
+func openNumber[T any](t *table[T], r row[T], name string, s spec, unitText string, bare bool) (profile.Number, bool) {
+	cell := t.cell(r, name)
+	f := t.fields[t.index[name]]
+	if unitText == "" {
+		unitText = f.unitText
+	} else if f.unitText != "" && unitKey(f.unitText) != unitKey(unitText) {
+		t.problem(r, name, fmt.Sprintf("unit %q in the row and %q in the header", unitText, f.unitText), "one unit")
+		return profile.Number{}, false
+	}
+	cell.Unit = unitText
+	switch u, ok := s.dim.find(unitText); {
+	case ok:
+		f.unit = u
+	case unitText == "" && (bare || !s.dim.needsUnit()):
+		f.unit = s.unit
+	case unitText == "":
+		t.problem(r, name, "no unit for "+s.name, fmt.Sprintf("a unit of %s in the header or in a unit column: %s", s.dim.name, s.dim.list()))
+		return profile.Number{}, false
+	default:
+		t.problem(r, name, fmt.Sprintf("%q is not a unit of %s", unitText, s.dim.name), "one of "+s.dim.list())
+		return profile.Number{}, false
+	}
+	n, _, _, message := readNumber(s, f, t.mark, cell)
+	wanted := s.wanted(f)
+	if message == "" && !n.Known {
+		message = "blank"
+	}
+	if message == "" {
+		if m, w := s.outside(n, f); m != "" {
+			message, wanted = m, w
+		}
+	}
+	if message != "" {
+		t.problem(r, name, strings.TrimSpace(message), wanted)
+		return profile.Number{}, false
+	}
+	return n, true
+}
