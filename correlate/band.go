@@ -38,7 +38,7 @@ type Member struct {
 // share their inputs and much of their data. Disagreement widens it.
 //
 // use lists the identifiers to choose from; where it is empty, the entries for
-// natural clay are taken, or those for organic soil where the organic content is
+// natural clay that are more than a plausibility check are taken, or those for organic soil where the organic content is
 // known and above 20 % (high-organic by EN ISO 14688-2; from memory, unverified).
 //
 // The error wraps ErrMissingInput where no entry has its inputs, and
@@ -90,7 +90,7 @@ func chosen(q Quantity, v Values, use []string) ([]Correlation, error) {
 	}
 	var out []Correlation
 	for _, c := range For(q) {
-		if slices.Contains(use, c.ID) || len(use) == 0 && c.Ground == ground {
+		if slices.Contains(use, c.ID) || len(use) == 0 && c.Ground == ground && !c.Plausibility {
 			out = append(out, c)
 		}
 	}

@@ -184,11 +184,15 @@ var compressionFromVoidRatio = []Correlation{
 	},
 }
 
+// lowSensitivity is the limit of low to moderate sensitivity that Terzaghi & Peck
+// state for their rule.
+const lowSensitivity = 4
+
 // sensitiveClayReadsHigher warns where sensitivity is known to be beyond that
 // of the rules for insensitive clay.
 func sensitiveClayReadsHigher(v Values, value float64) judged {
 	j := judged{value: value}
-	if v["St"] > 4 {
+	if v["St"] > lowSensitivity {
 		j.warnings = append(j.warnings, "sensitivity "+number(v["St"])+" is above 4: the slope just past yield is likely steeper than this")
 	}
 	return j

@@ -19,6 +19,10 @@ type Correlation struct {
 	// speaks for it.
 	Rank int
 
+	// Plausibility says that the entry is an order-of-magnitude check, never a
+	// design value: a band takes it only when asked for by its identifier.
+	Plausibility bool
+
 	Scatter  Scatter
 	Source   string // author, year, where
 	Verified Verification
@@ -49,6 +53,10 @@ type Input struct {
 	// Meaningful is the open interval outside which the correlation says
 	// nothing at all.
 	Meaningful Interval
+
+	// Optional says that the value is looked at where it is known, to warn or to
+	// refuse, or has a neutral value where it is not.
+	Optional bool
 }
 
 // Ground says what a correlation was made for, to keep a rule for peat from
@@ -141,6 +149,12 @@ func (in Input) above(low float64) Input {
 
 func (in Input) below(high float64) Input {
 	in.Meaningful.High = high
+	return in
+}
+
+// ifKnown makes the input one that is looked at only where it is known.
+func (in Input) ifKnown() Input {
+	in.Optional = true
 	return in
 }
 

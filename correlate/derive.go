@@ -25,6 +25,8 @@ var derivations = []derivation{
 	{"n0", []string{"e0"}, "100·e0/(1 + e0)", func(v Values) float64 { return 100 * v["e0"] / (1 + v["e0"]) }},
 	{"e0", []string{"n0"}, "n0/(100 − n0)", func(v Values) float64 { return v["n0"] / (100 - v["n0"]) }},
 	{"eL", []string{"LL", "Gs"}, "Gs·LL/100", func(v Values) float64 { return v["Gs"] * v["LL"] / 100 }},
+	{"e0eL", []string{"e0", "eL"}, "e0/eL", func(v Values) float64 { return v["e0"] / v["eL"] }},
+	{"e0eL", []string{"w", "LL"}, "w/LL, taken as saturated", func(v Values) float64 { return v["w"] / v["LL"] }},
 	{"OCR", []string{"preconsolidation", "effective"}, "σ′p/σ′v0", func(v Values) float64 { return v["preconsolidation"] / v["effective"] }},
 	{"preconsolidation", []string{"OCR", "effective"}, "OCR·σ′v0", func(v Values) float64 { return v["OCR"] * v["effective"] }},
 	{"Q", []string{"qnet", "effective"}, "(qt − σv0)/σ′v0", func(v Values) float64 { return v["qnet"] / v["effective"] }},

@@ -84,6 +84,9 @@ func (c Correlation) collect(given Values) ([]Used, error) {
 	var missing []error
 	for _, in := range c.Inputs {
 		value, derived, ok := resolve(in.Symbol, given)
+		if !ok && in.Optional {
+			continue
+		}
 		if !ok {
 			missing = append(missing, fmt.Errorf("%w: %s needs %s (%s)", ErrMissingInput, c.ID, in.Name, in.Symbol))
 			continue

@@ -8,7 +8,7 @@ const (
 	CompressionIndex         Quantity = "compression index"
 	CompressionRatio         Quantity = "compression ratio"
 	RecompressionIndex       Quantity = "recompression index"
-	SecondaryRatio           Quantity = "secondary compression over compression index"
+	SecondaryIndex           Quantity = "secondary compression index"
 	SecondaryStrain          Quantity = "secondary compression, strain"
 	AgeingRatio              Quantity = "overconsolidation ratio by ageing"
 	IntrinsicVoidRatio       Quantity = "intrinsic void ratio"
@@ -33,7 +33,7 @@ var quantities = []quantityWords{
 	{CompressionIndex, "Cc", ""},
 	{CompressionRatio, "CR", ""},
 	{RecompressionIndex, "Cr", ""},
-	{SecondaryRatio, "Cα/Cc", ""},
+	{SecondaryIndex, "Cα", ""},
 	{SecondaryStrain, "Cαε", ""},
 	{AgeingRatio, "OCR", ""},
 	{IntrinsicVoidRatio, "e*100", ""},
