@@ -28,6 +28,12 @@ func BoundAt(v float64, side Bound) Range {
 	return Range{Low: v, Best: v, High: v, Known: true, Bound: side}
 }
 
+// Scale returns the range times a factor greater than zero.
+func (r Range) Scale(f float64) Range {
+	r.Low, r.Best, r.High = r.Low*f, r.Best*f, r.High*f
+	return r
+}
+
 // MarshalJSON writes {"low":…,"best":…,"high":…}, or null where not known. Of a
 // bound it writes the low (at least) or the high (at most) alone.
 func (r Range) MarshalJSON() ([]byte, error) {
