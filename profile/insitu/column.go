@@ -1,6 +1,7 @@
 package insitu
 
 import (
+	"cmp"
 	"errors"
 	"fmt"
 	"math"
@@ -62,54 +63,50 @@ func arrange(input []Layer) (layers []Layer, problems []error) {
 		return nil, []error{fmt.Errorf("layers: %w; want at least one, starting at 0 m", ErrNoLayers)}
 	}
 	order := make([]int, len(input))
+	spans := slices.Clone(input)
 	for i, l := range input {
 		order[i] = i
 		problems = append(problems, l.problems(i+1)...)
+		// An inverted layer is put upright for the comparison with its
+		// neighbours, so that one slip is reported once.
+		spans[i].Top, spans[i].Base = min(l.Top, l.Base), max(l.Top, l.Base)
 	}
-	if len(problems) > 0 {
-		// Boundaries that are not numbers cannot be compared; what else is wrong
-		// with the others is a matter of each pair, so only inverted or weightless
-		// layers may go on.
-		for _, l := range input {
-			if !finite(l.Top) || !finite(l.Base) {
-				return nil, problems
-			}
+	for _, l := range input {
+		if !finite(l.Top) || !finite(l.Base) {
+			return nil, problems // what cannot be compared cannot meet
 		}
 	}
-	slices.SortStableFunc(order, func(a, b int) int {
-		switch {
-		case input[a].Top < input[b].Top:
-			return -1
-		case input[a].Top > input[b].Top:
-			return 1
-		}
-		return 0
-	})
+	slices.SortStableFunc(order, func(a, b int) int { return cmp.Compare(spans[a].Top, spans[b].Top) })
 
-	above, name := 0.0, "ground level"
+	above, upper := 0.0, 0 // the depth that the next layer must meet, and whose base it is
 	layers = make([]Layer, 0, len(input))
 	for _, i := range order {
-		l := input[i]
+		l := spans[i]
 		switch {
 		case l.Top > above+sameDepth:
-			problems = append(problems, fmt.Errorf("layer %d: top %g m lies below %s at %g m: %w; want layers that meet",
-				i+1, l.Top, name, above, ErrGap))
+			problems = append(problems, misfit(i+1, l.Top, "below", upper, above, ErrGap))
 		case l.Top < above-sameDepth:
-			problems = append(problems, fmt.Errorf("layer %d: top %g m lies above %s at %g m: %w; want layers that meet",
-				i+1, l.Top, name, above, ErrOverlap))
+			problems = append(problems, misfit(i+1, l.Top, "above", upper, above, ErrOverlap))
+		case l.Base > l.Top && l.Base <= above:
+			problems = append(problems, misfit(i+1, l.Base, "not below", upper, above, ErrOverlap))
 		default:
-			if l.Base > l.Top && l.Base <= above {
-				problems = append(problems, fmt.Errorf("layer %d: nothing is left of it when its top %g m meets %s at %g m: %w",
-					i+1, l.Top, name, above, ErrOverlap))
-			}
 			l.Top = above
 		}
 		layers = append(layers, l)
-		// After an inverted layer the deeper of its two ends goes on, so that one
-		// slip is reported once.
-		above, name = max(l.Base, l.Top), fmt.Sprintf("the base of layer %d", i+1)
+		if l.Base > above {
+			above, upper = l.Base, i+1
+		}
 	}
 	return layers, problems
+}
+
+// misfit says how the edge of a layer lies to the base of the one above it.
+func misfit(number int, edge float64, lies string, upper int, base float64, err error) error {
+	name := "ground level"
+	if upper > 0 {
+		name = fmt.Sprintf("the base of layer %d", upper)
+	}
+	return fmt.Errorf("layer %d: %g m lies %s %s at %g m: %w; want layers that meet", number, edge, lies, name, base, err)
 }
 
 // problems returns what is wrong with a layer on its own.
@@ -121,6 +118,9 @@ func (l Layer) problems(number int) (problems []error) {
 		if !finite(v.value) {
 			problems = append(problems, fmt.Errorf("layer %d: %s: %g: %w", number, v.name, v.value, ErrNotFinite))
 		}
+	}
+	if len(problems) > 0 {
+		return problems // signs and order of such numbers mean nothing
 	}
 	if l.Base <= l.Top {
 		problems = append(problems, fmt.Errorf("layer %d: top %g m, base %g m: %w", number, l.Top, l.Base, ErrInverted))

@@ -10,10 +10,9 @@ func (s *Stress) Hydrostatic() bool {
 	if !w.hasTable {
 		return len(w.points) == 0
 	}
-	top, base := w.fringe()
 	for _, p := range w.points {
 		switch {
-		case p.Depth < w.table && (p.Pressure != 0 || top < base && p.Depth > top):
+		case p.Depth < w.table && (p.Pressure != 0 || s.fringeTop < s.fringeBase && p.Depth > s.fringeTop):
 			return false
 		case p.Depth > w.table:
 			if off := p.Pressure - w.unitWeight*(p.Depth-w.table); off > w.unitWeight*sameDepth || off < -w.unitWeight*sameDepth {
@@ -45,7 +44,7 @@ func (s *Stress) Buoyant(depth float64) (float64, error) {
 	}
 	wet, table := s.base, s.base
 	if s.water.hasTable {
-		wet, table = s.water.fringe()
+		wet, table = s.fringeTop, s.fringeBase
 	}
 	sum := s.surcharge
 	if depth >= wet {

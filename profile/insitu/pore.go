@@ -35,7 +35,7 @@ func (w *water) nodes() []PorePressure {
 	}
 	own := PorePressure{Depth: w.table}
 	if w.table <= 0 {
-		own = PorePressure{Pressure: -w.table * w.unitWeight}
+		own = PorePressure{Pressure: w.unitWeight * (0 - w.table)}
 	}
 	at := sort.Search(len(w.points), func(i int) bool { return w.points[i].Depth >= own.Depth })
 	nodes := make([]PorePressure, 0, len(w.points)+1)

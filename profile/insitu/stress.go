@@ -3,6 +3,7 @@ package insitu
 import (
 	"errors"
 	"fmt"
+	"math"
 	"slices"
 	"sort"
 )
@@ -23,6 +24,8 @@ type Stress struct {
 	surcharge float64
 	water     water
 	base      float64
+
+	fringeTop, fringeBase float64 // equal without a capillary fringe
 
 	// Between two tops everything is linear: the sums down to each top are kept,
 	// so that a depth costs one search and one product.
@@ -61,10 +64,11 @@ func New(c Column) (*Stress, error) {
 func assemble(layers []Layer, surcharge float64, w water) (*Stress, error) {
 	s := &Stress{layers: layers, surcharge: surcharge, water: w, base: layers[len(layers)-1].Base}
 	line := w.line()
-	s.tops = cuts(layers, line, &w)
+	s.fringeTop, s.fringeBase = w.fringe()
+	s.align(line)
+	s.tops = s.cuts(line)
 	s.pieces = make([]piece, len(s.tops))
 
-	fringeTop, fringeBase := w.fringe()
 	total := surcharge + s.waterAbove()
 	layer, seg := 0, 0
 	for i, top := range s.tops {
@@ -83,7 +87,7 @@ func assemble(layers []Layer, surcharge float64, w water) (*Stress, error) {
 		// its ends: the middle tells whether the piece is under water.
 		middle := pore + line[seg].gradient*(bottom-top)/2
 		weight := layers[layer].UnitWeight
-		if middle > 0 || (top >= fringeTop && bottom <= fringeBase) {
+		if middle > 0 || (top >= s.fringeTop && bottom <= s.fringeBase) {
 			weight = layers[layer].SaturatedUnitWeight
 		}
 		s.pieces[i] = piece{total, weight, pore, line[seg].gradient}
@@ -95,19 +99,49 @@ func assemble(layers []Layer, surcharge float64, w water) (*Stress, error) {
 	return s, nil
 }
 
+// sameNumber is the difference up to which two depths in m are one number that
+// was reached by two roads, such as a boundary and a water table in feet.
+const sameNumber = 1e-11
+
+// align puts the pore pressure line and the fringe exactly on a boundary that
+// they miss by rounding alone, so that no stretch of no thickness is cut between.
+func (s *Stress) align(line []segment) {
+	onBoundary := func(depth float64) float64 {
+		if math.Abs(depth) <= sameNumber {
+			return 0
+		}
+		i := sort.Search(len(s.layers), func(i int) bool { return s.layers[i].Base >= depth-sameNumber })
+		if i < len(s.layers) && math.Abs(s.layers[i].Base-depth) <= sameNumber {
+			return s.layers[i].Base
+		}
+		return depth
+	}
+	s.fringeTop, s.fringeBase = onBoundary(s.fringeTop), onBoundary(s.fringeBase)
+	for i := range line {
+		top := onBoundary(line[i].top)
+		for _, other := range []float64{s.fringeTop, s.fringeBase} {
+			if math.Abs(other-top) <= sameNumber {
+				top = other
+			}
+		}
+		if i > 0 && top-line[i-1].top <= sameNumber {
+			top = line[i-1].top
+		}
+		line[i].top = top
+	}
+}
+
 // cuts returns the depths within the column, 0 first, at which a piece starts.
-func cuts(layers []Layer, line []segment, w *water) []float64 {
-	depths := make([]float64, 0, len(layers)+len(line)+2)
-	for _, l := range layers {
+func (s *Stress) cuts(line []segment) []float64 {
+	depths := make([]float64, 0, len(s.layers)+len(line)+2)
+	for _, l := range s.layers {
 		depths = append(depths, l.Top)
 	}
 	for _, g := range line {
 		depths = append(depths, g.top)
 	}
-	top, base := w.fringe()
-	depths = append(depths, top, base)
-	deepest := layers[len(layers)-1].Base
-	depths = slices.DeleteFunc(depths, func(d float64) bool { return d < 0 || d >= deepest })
+	depths = append(depths, s.fringeTop, s.fringeBase)
+	depths = slices.DeleteFunc(depths, func(d float64) bool { return d < 0 || d >= s.base })
 	slices.Sort(depths)
 	return slices.Compact(depths)
 }
@@ -189,13 +223,5 @@ func (s *Stress) WaterTable() (depth float64, ok bool) { return s.water.table, s
 // points, depths where u0 passes zero, and the deepest base. Between two of them
 // every stress is linear.
 func (s *Stress) Breaks() []float64 {
-	breaks := append(slices.Clone(s.tops), s.base)
-	for _, p := range s.water.points {
-		// A point on the straight line through its neighbours is a kink for
-		// nobody but the reader, who looks for it.
-		if at := sort.SearchFloat64s(breaks, p.Depth); at < len(breaks) && breaks[at] != p.Depth {
-			breaks = slices.Insert(breaks, at, p.Depth)
-		}
-	}
-	return breaks
+	return append(slices.Clone(s.tops), s.base)
 }

@@ -112,7 +112,7 @@ func (w *water) fixed(depth float64) (pressure float64, ok bool) {
 	case !w.hasTable:
 		return 0, false
 	case w.table <= 0:
-		return -w.table * w.unitWeight, depth <= sameDepth
+		return w.unitWeight * (0 - w.table), depth <= sameDepth // 0 − 0 prints as 0, −0 would not
 	}
 	return 0, depth >= w.table-sameDepth && depth <= w.table+sameDepth
 }
