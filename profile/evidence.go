@@ -22,11 +22,11 @@ var sources = []source{
 	{"cone, net resistance", "mayne-1995-qnet", func(r *Result) bool { return r.NetConeResistance.Known }},
 	{"cone, excess pore pressure", "chen-mayne-1996-du2", func(r *Result) bool { return r.ExcessConePressure.Known }},
 	{"cone, effective resistance", "mayne-2005-qeff", func(r *Result) bool { return r.EffectiveCone.Known }},
-	{"field vane", "mayne-mitchell-1988-sp", func(r *Result) bool { return r.UndrainedStrength.Known && isVane(r) }},
-	{"undrained strength", "mesri-1975-sp", func(r *Result) bool { return r.UndrainedStrength.Known && !isVane(r) }},
-	{"standard penetration test", "mayne-kemper-1988-sp", func(r *Result) bool { return r.N60.Known }},
+	{"field vane", "mayne-mitchell-1988-yield", func(r *Result) bool { return r.UndrainedStrength.Known && isVane(r) }},
+	{"undrained strength", "mesri-1975-yield", func(r *Result) bool { return r.UndrainedStrength.Known && !isVane(r) }},
+	{"standard penetration test", "mayne-kemper-1988-yield", func(r *Result) bool { return r.N60.Known }},
 	{"dilatometer", "marchetti-1980-ocr", func(r *Result) bool { return r.HorizontalStressIndex.Known }},
-	{"shear wave velocity", "mayne-robertson-lunne-1998", func(r *Result) bool { return r.ShearWaveVelocity.Known }},
+	{"shear wave velocity", "mayne-1998-vs", func(r *Result) bool { return r.ShearWaveVelocity.Known }},
 }
 
 // isVane tells whether an undrained strength was measured with a vane in the

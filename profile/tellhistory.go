@@ -1,6 +1,8 @@
 package profile
 
 import (
+	"fmt"
+
 	"pastload/profile/history"
 )
 
@@ -28,8 +30,11 @@ func (g *ground) tellHistory(site *Site, p *Profile, b *BoreholeProfile, station
 		b.Notes = append(b.Notes, "No stress history is given: "+err.Error())
 		return
 	}
+	silent := g.silent(&in, b)
 	for i := range result.Points {
-		tellPoint(&b.Points[i], &result.Points[i])
+		if !silent[stations[i].stratum] {
+			tellPoint(&b.Points[i], &result.Points[i])
+		}
 	}
 	for i, t := range result.Tests {
 		if t.Used {
@@ -37,9 +42,15 @@ func (g *ground) tellHistory(site *Site, p *Profile, b *BoreholeProfile, station
 		}
 	}
 	for _, z := range result.Zones {
+		if silent[z.Layer] {
+			continue
+		}
 		b.Zones = append(b.Zones, zoneInterval(z))
 	}
 	for _, l := range result.Layers {
+		if silent[l.Layer] {
+			continue
+		}
 		s := &b.Strata[l.Layer]
 		s.Sentence = l.Sentence
 		for _, m := range l.Mechanisms {
@@ -80,4 +91,27 @@ func zoneInterval(h history.ZoneInterval) ZoneInterval {
 		z.OrZone = zoneOf(h.Other)
 	}
 	return z
+}
+
+// silent tells which strata no evidence speaks about: nothing is said of their
+// stress history, however wide a band could be drawn.
+func (g *ground) silent(in *history.Input, b *BoreholeProfile) []bool {
+	heard := make([]bool, len(in.Layers))
+	for _, t := range in.Tests {
+		heard[t.Layer] = true
+	}
+	for _, t := range in.Neighbours {
+		heard[t.Layer] = true
+	}
+	for _, r := range in.Readings {
+		heard[r.Layer] = true
+	}
+	silent := make([]bool, len(heard))
+	for i, h := range heard {
+		if silent[i] = !h; silent[i] {
+			s := &g.borehole.Strata[i]
+			b.Notes = append(b.Notes, fmt.Sprintf("%s, %.2f to %.2f m: no test, sounding or neighbouring borehole speaks of its stress history, so none is given.", stratumName(s.Name), s.Top, s.Base))
+		}
+	}
+	return silent
 }

@@ -1,0 +1,69 @@
+package main
+
+import (
+	"bytes"
+
+	"github.com/spf13/cobra"
+
+	"pastload/profile"
+	"pastload/render/report"
+	"pastload/render/sheet"
+)
+
+func newReportCommand() *cobra.Command {
+	var c common
+	cmd := &cobra.Command{
+		Use:   "report SITE... -o DIR",
+		Short: "Everything: report.html, drawings, and the tables as CSV",
+		Example: `  pastload report mysite -o out
+  pastload report site1 site2 -o out     a subfolder for each site`,
+		Args: sites,
+		RunE: func(cmd *cobra.Command, paths []string) error {
+			if err := c.check(); err != nil {
+				return err
+			}
+			if c.output == "" {
+				return usagef("report needs a folder: -o DIR")
+			}
+			profiles, err := c.loadAll(cmd, paths, profile.Options{})
+			if err != nil {
+				return err
+			}
+			for i, dir := range siteFolders(c.output, paths) {
+				files, err := reportFiles(profiles[i], c.unitSystem())
+				if err != nil {
+					return err
+				}
+				if err := writeFiles(dir, files); err != nil {
+					return err
+				}
+				c.remark(cmd, "%s in %s; open %s/report.html", plural(len(files), "file"), dir, dir)
+			}
+			return nil
+		},
+	}
+	c.register(cmd)
+	return cmd
+}
+
+// reportFiles makes every file of a report in memory.
+func reportFiles(p *profile.Profile, u report.Units) ([]file, error) {
+	figures, err := drawAll(p, sheet.A3)
+	if err != nil {
+		return nil, err
+	}
+	var page bytes.Buffer
+	if err := report.Compose(p, figures).WriteHTML(&page, u); err != nil {
+		return nil, err
+	}
+	files := []file{{"report.html", page.Bytes()}}
+	files = append(files, figureFiles("drawings/", figures)...)
+	for _, t := range report.Tables(p) {
+		var b bytes.Buffer
+		if err := t.WriteCSV(&b, u); err != nil {
+			return nil, err
+		}
+		files = append(files, file{"tables/" + t.Name + ".csv", b.Bytes()})
+	}
+	return files, nil
+}
