@@ -104,7 +104,6 @@ func (s *site) results(g *grid) {
 	for i := range s.out.Boreholes {
 		slices.SortStableFunc(s.out.Boreholes[i].Results, func(a, b profile.Result) int { return compare(a.Depth.Value, b.Depth.Value) })
 	}
-	s.resultTable = t
 }
 
 // checkResult checks what one row says of itself.
@@ -245,12 +244,9 @@ func (s *site) place(b *profile.Borehole, torn bool) {
 	if torn || len(b.Strata) == 0 {
 		return
 	}
-	floor := b.Strata[len(b.Strata)-1].Base
+	s.placeOthers(b)
 	for _, r := range b.Results {
-		if r.Depth.Value > floor+touching {
-			s.rd.add(Problem{File: r.Source.File, Line: r.Source.Line, Column: r.Source.Column, Name: "depth",
-				Message: fmt.Sprintf("%s m lies below the last layer of %s, which ends at %s m", metres(r.Depth), b.Name, number(floor)),
-				Wanted:  "a depth inside the strata, or a layer that reaches it"})
+		if s.tooDeep(b, r.Depth) {
 			continue
 		}
 		if r.Stratum == "" {
@@ -266,6 +262,40 @@ func (s *site) place(b *profile.Borehole, torn bool) {
 		}
 		if !agrees {
 			s.rd.note(r.Source.String(), fmt.Sprintf("the results place %s m of %s in %q, the strata table in %s", metres(r.Depth), b.Name, r.Stratum, quoted(here)))
+		}
+	}
+}
+
+// tooDeep reports a depth below the last layer.
+func (s *site) tooDeep(b *profile.Borehole, depth profile.Number) bool {
+	floor := b.Strata[len(b.Strata)-1].Base
+	if depth.Value <= floor+touching {
+		return false
+	}
+	at := depth.Source
+	s.rd.add(Problem{File: at.File, Line: at.Line, Column: at.Column, Name: "depth",
+		Message: fmt.Sprintf("%s m lies below the last layer of %s, which ends at %s m", metres(depth), b.Name, number(floor)),
+		Wanted:  "a depth inside the strata, or a layer that reaches it"})
+	return true
+}
+
+// placeOthers does the same for oedometer specimens. A sounding or an instrument
+// may well reach deeper than the borehole: that is noted.
+func (s *site) placeOthers(b *profile.Borehole) {
+	floor := b.Strata[len(b.Strata)-1].Base
+	for _, c := range s.out.Curves {
+		if c.Borehole == b.Name && c.Depth.Known {
+			s.tooDeep(b, c.Depth)
+		}
+	}
+	for _, w := range b.Water {
+		if w.Depth.Value > floor+touching {
+			s.rd.note(w.Depth.Source.String(), fmt.Sprintf("the observation at %s m lies below the last layer of %s, which ends at %s m", metres(w.Depth), b.Name, number(floor)))
+		}
+	}
+	for _, snd := range s.out.Soundings {
+		if n := len(snd.Readings); snd.Borehole == b.Name && n > 0 && snd.Readings[n-1].Depth > floor+touching {
+			s.rd.note(b.Name, fmt.Sprintf("the sounding reaches %s m, the last layer ends at %s m", number(snd.Readings[n-1].Depth), number(floor)))
 		}
 	}
 }

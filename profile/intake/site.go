@@ -9,14 +9,13 @@ import (
 
 // A site is a profile.Site in the making.
 type site struct {
-	rd          *reader
-	out         profile.Site
-	single      bool           // one results file is all there is
-	declared    bool           // a boreholes table says which boreholes exist
-	index       map[string]int // folded name → place in out.Boreholes
-	layered     map[int]bool   // the strata table has rows for the borehole
-	torn        map[int]bool   // some of those rows could not be used
-	resultTable *table[resultRow]
+	rd       *reader
+	out      profile.Site
+	single   bool           // one results file is all there is
+	declared bool           // a boreholes table says which boreholes exist
+	index    map[string]int // folded name → place in out.Boreholes
+	layered  map[int]bool   // the strata table has rows for the borehole
+	torn     map[int]bool   // some of those rows could not be used
 }
 
 // build turns grids into the site, table by table: what others refer to comes
@@ -27,7 +26,12 @@ func (s *site) build(grids map[Table]*grid) {
 	s.strata(grids[Strata])
 	s.water(grids[Water])
 	s.results(grids[Results])
+	s.curves(grids[Oedometer])
+	s.soundings(grids[Cone])
 	s.layers()
+	// These may name strata, which are known only now.
+	s.past(grids[History])
+	s.decisions(grids[Decisions])
 }
 
 // indexOf returns the field of a column, or one beyond every row.

@@ -42,6 +42,11 @@ func Tables() []TableDoc {
 		describe(Strata, "a layer in a borehole", specs(stratumColumns)),
 		describe(Water, "a pore pressure observation", specs(waterColumns)),
 		describe(Results, "what was measured at a depth", specs(resultColumns)),
+		describe(Oedometer, "one load stage of a test", specs(stageColumns)),
+		describe(Cone, "one reading of a sounding", specs(coneColumns)),
+		describe(History, "something known of the past", specs(eventColumns)),
+		describe(Decisions, "an engineer's decision", specs(decisionColumns)),
+		describe(Settings, "a setting", specs(settingColumns)),
 	}
 }
 
