@@ -12,7 +12,7 @@ func (s *Stress) Hydrostatic() bool {
 	}
 	for _, p := range w.points {
 		switch {
-		case p.Depth < w.table && (p.Pressure != 0 || s.fringeTop < s.fringeBase && p.Depth > s.fringeTop):
+		case p.Depth < w.table && (p.Pressure != 0 || s.fringeTop < s.fringeBase && p.Depth > s.fringeTop+sameNumber):
 			return false
 		case p.Depth > w.table:
 			if off := p.Pressure - w.unitWeight*(p.Depth-w.table); off > w.unitWeight*sameDepth || off < -w.unitWeight*sameDepth {

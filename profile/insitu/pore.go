@@ -69,7 +69,7 @@ func (w *water) join(line []segment, a, b PorePressure) []segment {
 		return line // the table has moved onto a point, both at 0
 	}
 	top, base := w.fringe()
-	if top < base && b.Depth == base && a.Pressure == 0 && a.Depth <= top {
+	if top < base && b.Depth == base && a.Pressure == 0 && a.Depth <= top+sameNumber {
 		if a.Depth < top {
 			line = append(line, segment{a.Depth, 0, 0})
 		}

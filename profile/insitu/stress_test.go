@@ -326,6 +326,19 @@ func TestDepthsReachedByTwoRoads(t *testing.T) {
 	if got := mustAt(t, s, boundary); !near(got.Pore, -water, exact) || got.UnitWeight != 21 {
 		t.Errorf("at the boundary: %+v; want the saturated lower layer", got)
 	}
+	// The top of a fringe (0.4 − 0.1) and points at 0.3: a suction rules the line, a
+	// zero leaves the fringe its step.
+	for _, pressure := range []float64{-3, 0} {
+		for _, depth := range []float64{0.3, 0.30000000000000004, 0.30000000000000010} {
+			s = mustNew(t, insitu.Column{
+				Layers: []insitu.Layer{layer(0, 2, 16, 20)}, HasWater: true, WaterTable: 0.4, CapillaryRise: 0.1,
+				WaterUnitWeight: water, Measured: []insitu.PorePressure{{Depth: depth, Pressure: pressure}},
+			})
+			if got := s.Breaks(); len(got) != 4 || s.Hydrostatic() != (pressure == 0) {
+				t.Errorf("%g kPa at %.17g m: breaks %v, hydrostatic %v", pressure, depth, got, s.Hydrostatic())
+			}
+		}
+	}
 	s = mustNew(t, insitu.Column{Layers: []insitu.Layer{layer(0, 2, 16, 20)}, HasWater: true, WaterTable: 1e-13, WaterUnitWeight: water})
 	if got, want := s.Breaks(), []float64{0, 2}; !slices.Equal(got, want) {
 		t.Errorf("breaks %v; want %v", got, want)
