@@ -46,7 +46,7 @@ var compressionReconstituted = []Correlation{
 		ID: "burland-1990-cc", Name: "Burland (1990), intrinsic compression", Quantity: CompressionIndex,
 		Formula: "Cc* = 0.256·eL − 0.04",
 		// The fit holds for eL 0.6 to 4.5, above the A-line.
-		Inputs: []Input{input("eL").above(0.6 - 1e-9).below(4.5 + 1e-9)},
+		Inputs: []Input{input("eL").from(0.6).upTo(4.5)},
 		Soil:   "reconstituted clay, above the A-line", Ground: Reconstituted,
 		Family: familyBurland, Rank: 1, Scatter: assumedCompressionScatter,
 		Source:   "Burland 1990, Géotechnique 40(3), 329–378",

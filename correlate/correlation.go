@@ -1,6 +1,9 @@
 package correlate
 
-import "slices"
+import (
+	"math"
+	"slices"
+)
 
 // A Correlation is one published relation with what must be known to use it.
 type Correlation struct {
@@ -151,6 +154,11 @@ func (in Input) below(high float64) Input {
 	in.Meaningful.High = high
 	return in
 }
+
+// from and upTo are above and below with the limit itself let in.
+func (in Input) from(low float64) Input { return in.above(math.Nextafter(low, math.Inf(-1))) }
+
+func (in Input) upTo(high float64) Input { return in.below(math.Nextafter(high, math.Inf(1))) }
 
 // ifKnown makes the input one that is looked at only where it is known.
 func (in Input) ifKnown() Input {

@@ -64,7 +64,7 @@ var intrinsic = []Correlation{
 	{
 		ID: "burland-1990-e100", Name: "Burland (1990), intrinsic void ratio", Quantity: IntrinsicVoidRatio,
 		Formula: "e*100 = 0.109 + 0.679·eL − 0.089·eL² + 0.016·eL³",
-		Inputs:  []Input{input("eL").above(0.6 - 1e-9).below(4.5 + 1e-9)},
+		Inputs:  []Input{input("eL").from(0.6).upTo(4.5)},
 		Soil:    "reconstituted clay, above the A-line", Ground: Reconstituted, Family: familyBurland, Rank: 1,
 		Scatter: Scatter{Between: 0.05, Within: 0.05, Note: "assumed"},
 		Source:  "Burland 1990, Géotechnique 40(3), 329–378", Verified: AbstractOnly,

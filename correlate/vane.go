@@ -67,7 +67,7 @@ var sensitivity = []Correlation{
 	{
 		ID: "ching-phoon-2012-st", Name: "Ching & Phoon (2012), sensitivity", Quantity: Sensitivity,
 		Formula: "St = 20.73·LI^1.910",
-		Inputs:  []Input{input("LI").within(0.2, 2, usualRange).above(0).below(2 + 1e-9)},
+		Inputs:  []Input{input("LI").within(0.2, 2, usualRange).above(0).upTo(2)},
 		Soil:    "structured clay", Family: familyLiquidityIndex, Rank: 1, Plausibility: true,
 		Scatter: Scatter{Between: 0.80, Within: 0.53, Note: "COV 1.28 and bias 0.88 of Ching & Phoon 2014 (from memory), split by assumption"},
 		Source:  "Ching & Phoon 2012, Can. Geotech. J. 49(5), 522–545", Verified: FromMemory,
@@ -76,7 +76,7 @@ var sensitivity = []Correlation{
 	{
 		ID: "wroth-1979", Name: "Wroth (1979)", Quantity: RemouldedStrength,
 		Formula: "su = 170·exp(−4.6·LI), kPa",
-		Inputs:  []Input{input("LI").within(0, 1, publishedRange).above(-0.5).below(2)},
+		Inputs:  []Input{input("LI").within(0, 1, publishedRange).above(-0.5).upTo(2)},
 		Soil:    "remoulded clay", Ground: Reconstituted, Family: familyCriticalState, Rank: 1,
 		Scatter: Scatter{Between: 0.5, Within: 0.3, Note: "assumed"},
 		Source:  "Wroth 1979; Wroth & Wood 1978, Can. Geotech. J. 15(2), 137–145", Verified: FormulaRead,
