@@ -216,9 +216,6 @@ func (rd *reader) checkWidths(g *grid, fields []field) []gridRow {
 
 // decimalMark decides the decimal mark of a file from all its number cells.
 func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []gridRow) byte {
-	if g.point {
-		return '.'
-	}
 	var c census
 	for _, r := range rows {
 		for i, f := range fields {
@@ -243,6 +240,10 @@ func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []grid
 		}
 	}
 	mark, wrong, note := c.decide(rd.opt.Decimal)
+	if g.point {
+		// Number cells of a workbook have a point; a comma means text.
+		mark, wrong, note = '.', c.ask(c.grouped), ""
+	}
 	for _, p := range wrong {
 		p.File = g.file
 		rd.add(p)

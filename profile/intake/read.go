@@ -162,6 +162,10 @@ func (rd *reader) open(path string) (grids map[Table]*grid, single bool) {
 			grids[t] = g
 		}
 		return grids, t == Results
+	case strings.EqualFold(filepath.Ext(path), ".xlsx"), strings.EqualFold(filepath.Ext(path), ".xlsm"):
+		rd.openWorkbook(path, grids)
+	case strings.EqualFold(filepath.Ext(path), ".xls"), strings.EqualFold(filepath.Ext(path), ".ods"):
+		rd.add(Problem{File: filepath.Base(path), Message: "a workbook of another kind", Wanted: "the workbook saved as .xlsx"})
 	default:
 		rd.add(Problem{File: filepath.Base(path), Message: "is no table", Wanted: "a folder of CSV tables, a CSV file (.csv, .tsv, .txt) or an .xlsx workbook"})
 	}
