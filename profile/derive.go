@@ -24,7 +24,11 @@ func (r *Result) values(effective Number) correlate.Values {
 	put("organic", r.OrganicContent)
 	put("St", r.Sensitivity)
 	put("Cc", r.CompressionIndex)
-	put("su", r.UndrainedStrength)
+	if isVane(r) {
+		put("suFV", r.UndrainedStrength)
+	} else {
+		put("su", r.UndrainedStrength)
+	}
 	put("N60", r.N60)
 	put("KD", r.HorizontalStressIndex)
 	put("ID", r.MaterialIndex)

@@ -34,8 +34,10 @@ func newProfileCommand() *cobra.Command {
 				return err
 			}
 			all := together(profiles)
-			return c.show(cmd, all, report.Points(all.Boreholes...), report.Zones(all.Boreholes...),
-				report.Tests(all.Boreholes...), report.Assumptions(all.Boreholes...))
+			if c.format == "table" {
+				return c.show(cmd, all, report.Terminal(all.Boreholes)...)
+			}
+			return c.show(cmd, all, report.Points(all.Boreholes...))
 		},
 	}
 	c.register(cmd)

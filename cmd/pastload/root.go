@@ -87,6 +87,8 @@ names, or a single CSV of results with depth. Start with:
 		newProfileCommand(),
 		newDrawCommand(),
 		newReportCommand(),
+		newCorrelateCommand(),
+		newYieldCommand(),
 	)
 	for _, c := range append(root.Commands(), root) {
 		c.Args = usageArgs(c.Args)

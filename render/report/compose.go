@@ -154,10 +154,24 @@ func profileBlocks(b *profile.BoreholeProfile) []Block {
 		"preconsolidation_stress_low", "preconsolidation_stress", "preconsolidation_stress_high", "ocr_low", "ocr", "ocr_high", "pop", "zone", "zone_probability")
 	return []Block{
 		Zones(*b).Without("borehole"),
-		Strata(*b).Without("borehole"),
+		likely(Strata(*b)).Without("borehole"),
 		points.Named("Stresses and stress history with depth, " + b.Borehole),
 		List(b.Notes),
 	}
+}
+
+// likely keeps the mechanisms that are worth a reader's time.
+func likely(t *Table) *Table {
+	const from = 0.05
+	out := *t
+	out.Rows = nil
+	for _, r := range t.Rows {
+		if p := r[5]; p.Known && p.Value >= from {
+			out.Rows = append(out.Rows, r)
+		}
+	}
+	out.Note = "Mechanisms with a probability of 5 % or more; the table mechanisms.csv has all of them. " + t.Note
+	return &out
 }
 
 func testBlocks(p *profile.Profile, curves []Figure) []Block {
@@ -167,6 +181,7 @@ func testBlocks(p *profile.Profile, curves []Figure) []Block {
 			"preconsolidation_stress_high", "laboratory", "ocr", "grade", "expected", "expected_low", "expected_high", "z", "verdict"),
 		tests.Only("borehole", "depth", "specimen", "used", "why").Named("Which value is used, and why"),
 	}
+	out = append(out, Specimens(p.Specimens), Grades(p.Specimens), Methods(p.Specimens))
 	return append(out, blocks(curves)...)
 }
 

@@ -33,7 +33,6 @@ type List []string
 type Figure struct {
 	ID      string // letters, digits and dashes, unique in the document
 	Caption string
-	Alt     string // what the drawing shows, in words
 	SVG     []byte
 	Large   bool // drawn for A3
 }

@@ -25,9 +25,11 @@ type htmlPage struct {
 	Sections []htmlSection
 }
 
+// htmlSection has a Class that chooses its paper: a section with a wide table
+// lies across the page, one that is a large drawing has an A3 page to itself.
 type htmlSection struct {
-	ID, Number, Title string
-	Blocks            []htmlBlock
+	ID, Number, Title, Class string
+	Blocks                   []htmlBlock
 }
 
 // htmlBlock has one of its fields set.
@@ -72,7 +74,14 @@ func (d *Document) WriteHTML(w io.Writer, u Units) error {
 	for i, s := range d.Sections {
 		h := htmlSection{ID: s.ID, Number: strconv.Itoa(i + 1), Title: s.Title}
 		for _, b := range s.Blocks {
-			h.Blocks = append(h.Blocks, htmlOf(b, u))
+			hb := htmlOf(b, u)
+			switch {
+			case hb.Figure != nil && hb.Figure.Large:
+				h.Class = "sheet"
+			case hb.Table != nil && hb.Table.Wide && h.Class == "":
+				h.Class = "across"
+			}
+			h.Blocks = append(h.Blocks, hb)
 		}
 		p.Sections = append(p.Sections, h)
 	}

@@ -23,6 +23,16 @@ func three(r profile.Range) []Cell {
 	return []Cell{N(r.Low), N(r.Best), N(r.High)}
 }
 
+// ends makes the low, best and high cells of a Range that may be a bound: the
+// bound stands in the middle and the ends are empty, as nothing is known of them.
+func ends(r profile.Range) []Cell {
+	cells := three(r)
+	if r.Bound != profile.Exact {
+		cells[0], cells[2] = Cell{}, Cell{}
+	}
+	return cells
+}
+
 // Points returns the profile of boreholes with depth.
 func Points(bs ...profile.BoreholeProfile) *Table {
 	t := &Table{
@@ -98,7 +108,7 @@ func Tests(bs ...profile.BoreholeProfile) *Table {
 	}
 	for _, b := range bs {
 		for _, s := range b.Tests {
-			p, e := three(s.Preconsolidation), three(s.Expected)
+			p, e := ends(s.Preconsolidation), three(s.Expected)
 			t.Add(T(b.Borehole), N(s.Depth), T(s.Specimen), T(s.Stratum), number(s.Effective), T(s.Bound.String()),
 				p[1], p[0], p[2], three(s.Laboratory)[1], number(s.OCR), number(s.POP), T(s.Grade),
 				e[1], e[0], e[2], number(s.Z), T(s.Verdict), T(yes(s.Used)), T(s.Why))
@@ -352,6 +362,7 @@ func Tables(p *profile.Profile) []*Table {
 	var out []*Table
 	for _, t := range []*Table{
 		Points(p.Boreholes...), Tests(p.Boreholes...), Zones(p.Boreholes...), Strata(p.Boreholes...),
+		Specimens(p.Specimens), Methods(p.Specimens), Grades(p.Specimens),
 		Compression(p.Boreholes...), Layers(p.Site), Water(p.Site), Results(p.Site), Assumptions(p.Boreholes...), Sources(p.Site),
 	} {
 		if len(t.Rows) > 0 {

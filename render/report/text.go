@@ -35,6 +35,9 @@ func (t *Table) WriteText(w io.Writer, u Units) error {
 			width[i] = max(width[i], utf8.RuneCountInString(s))
 		}
 	}
+	if strings.Join(head, "") == "" {
+		rows = rows[1:] // a table of properties has no headings
+	}
 	for n, r := range rows {
 		var line strings.Builder
 		for i, s := range r {
@@ -49,7 +52,7 @@ func (t *Table) WriteText(w io.Writer, u Units) error {
 			}
 		}
 		b.WriteString(strings.TrimRight(line.String(), " ") + "\n")
-		if n == 0 {
+		if n == 0 && len(rows) > len(t.Rows) {
 			total := 0
 			for _, w := range width {
 				total += w + 2
