@@ -37,7 +37,7 @@ func newAdoptions(site *profile.Site, rs []*record) *adoptions {
 	names := strataOf(site, rs)
 	for i := range site.Decisions {
 		d := &site.Decisions[i]
-		if d.Decision != "adopt value" || !d.Value.Known || forSpecimen(d, rs) {
+		if d.Decision != profile.AdoptValue || !d.Value.Known || forSpecimen(d, rs) {
 			continue
 		}
 		stratum, borehole, ok := place(site, d, names)
@@ -61,7 +61,7 @@ func where(d *profile.Decision) string {
 // forSpecimen reports whether the decision is on a value of one specimen.
 func forSpecimen(d *profile.Decision, rs []*record) bool {
 	for _, r := range rs {
-		if !concerns(d, r) {
+		if !d.Concerns(r.borehole, r.depth, r.specimen) {
 			continue
 		}
 		for i := range quantities {
@@ -141,7 +141,7 @@ func (p *Parameter) adopt(list []Adoption, scope string, boreholes []string) {
 	}
 	for _, a := range list {
 		if best < 0 && a.Borehole != "" {
-			p.Warnings = append(p.Warnings, fmt.Sprintf("%s is adopted for %s only; the stratum as a whole has no adopted value.", quantityText(a.Value.Value, p.Unit), a.Borehole))
+			p.caution("%s is adopted for %s only; the stratum as a whole has no adopted value.", quantityText(a.Value.Value, p.Unit), a.Borehole)
 		}
 	}
 	p.compareAdopted()
@@ -155,13 +155,13 @@ func (p *Parameter) compareAdopted() {
 	}
 	v := p.Adopted.Value
 	if v < p.Min.Value || v > p.Max.Value {
-		p.Warnings = append(p.Warnings, fmt.Sprintf("The adopted value of %s lies outside the range of the results, %s to %s.",
-			quantityText(v, p.Unit), number(p.Min.Value), quantityText(p.Max.Value, p.Unit)))
+		p.caution("The adopted value of %s lies outside the range of the results, %s to %s.",
+			quantityText(v, p.Unit), number(p.Min.Value), quantityText(p.Max.Value, p.Unit))
 	}
 	switch {
 	case p.Side == Low && p.Low.Known && v > p.Low.Value:
-		p.Warnings = append(p.Warnings, fmt.Sprintf("The adopted value of %s is higher than the advised low of %s.", quantityText(v, p.Unit), quantityText(p.Low.Value, p.Unit)))
+		p.caution("The adopted value of %s is higher than the advised low of %s.", quantityText(v, p.Unit), quantityText(p.Low.Value, p.Unit))
 	case p.Side == High && p.High.Known && v < p.High.Value:
-		p.Warnings = append(p.Warnings, fmt.Sprintf("The adopted value of %s is lower than the advised high of %s.", quantityText(v, p.Unit), quantityText(p.High.Value, p.Unit)))
+		p.caution("The adopted value of %s is lower than the advised high of %s.", quantityText(v, p.Unit), quantityText(p.High.Value, p.Unit))
 	}
 }

@@ -1,6 +1,10 @@
 package design
 
-import "fmt"
+import (
+	"fmt"
+
+	"pastload/profile"
+)
 
 // advise chooses a way and says why.
 func (p *Parameter) advise(o Options, edition Edition, e evaluation) {
@@ -33,43 +37,66 @@ func (p *Parameter) adviseLine(o Options, e evaluation) {
 	if o.Estimate == Fractile {
 		id = "line-fractile"
 	}
-	p.take(id, fmt.Sprintf("The values change with depth by %s per metre (p = %s), so a line is used and not one value; it holds from %.2f to %.2f m only.",
-		quantityText(e.line.SlopeAt(p.middle()), p.Unit), chance(e.line.P), e.line.From, e.line.To))
+	p.take(id, fmt.Sprintf("The values change with depth by about %s per metre (%s), so a line is used and not one value; it holds from %.2f to %.2f m only.",
+		withUnit(rough(e.line.SlopeAt(p.middle())), p.Unit), chance(e.line.P), e.line.From, e.line.To))
 }
 
 // middle is the middle of the tested depths.
 func (p *Parameter) middle() float64 { return p.Trend.From + (p.Trend.To-p.Trend.From)/2 }
 
-// adviseConstant takes a constant: the sample's own variance where it is large
-// enough to know it or larger than assumed, else the assumed one.
+// adviseConstant takes a constant: the sample's own variance where there are
+// enough values to know it or where it is larger than assumed, else the assumed.
 func (p *Parameter) adviseConstant(o Options, e evaluation) {
-	own, assumed := WayMeanUnknown, WayMeanKnown
-	what := "The mean over a large zone is taken to govern"
-	if o.Estimate == Fractile {
-		own, assumed = WayFractileUnknown, WayFractileKnown
-		what = "The worst 5 % of the ground is taken to govern"
-	}
-	n := float64(p.N)
-	counted := values(p.N, "is", "are")
+	n, counted := float64(p.N), values(p.N, "is", "are")
 	if o.EffectiveCount {
 		n = e.count
-		counted += fmt.Sprintf(" worth %.1f independent ones, which is", n)
+		counted = fmt.Sprintf("%d values worth %.1f independent ones are", p.N, n)
 	}
-	scatter := p.COV
-	switch {
-	case n >= manyValues:
-		p.take(own, fmt.Sprintf("%s; %s enough to know the scatter from the sample.", what, counted))
-	case e.q.cov == 0 || !scatter.Known:
-		p.take(own, fmt.Sprintf("%s; no usual scatter is known for this quantity, so that of the sample is used, with the margin that %s due.", what, counted))
-	case scatter.Value > e.q.cov:
-		p.take(own, fmt.Sprintf("%s; the sample scatters more (COV %.2f) than is usual (%.2f), so its own scatter is used.", what, scatter.Value, e.q.cov))
-	default:
-		p.take(assumed, fmt.Sprintf("%s; %s too few to know the scatter, and the sample scatters no more (COV %.2f) than is usual, so a COV of %.2f is assumed.", what, counted, scatter.Value, e.q.cov))
+	id, why := e.constantWay(o.Estimate, n, p.COV)
+	what := "The mean over a large zone is taken to govern"
+	if o.Estimate == Fractile {
+		what = "The worst 5 % of the ground is taken to govern"
 	}
+	switch why {
+	case enough:
+		why = fmt.Sprintf("%s enough to know the scatter from the sample.", counted)
+	case unusual:
+		why = "no usual scatter is known for this quantity, so that of the sample is used."
+	case scattered:
+		why = fmt.Sprintf("the sample scatters more (COV %s) than is usual (%s), so its own scatter is used.", rough(p.COV.Value), rough(e.q.cov))
+	case assumedScatter:
+		why = fmt.Sprintf("%s too few to know the scatter, and the sample scatters no more (COV %s) than is usual, so a COV of %s is assumed.", counted, rough(p.COV.Value), rough(e.q.cov))
+	}
+	p.take(id, what+"; "+why)
 	if p.Way == "" {
 		p.Method = "range and median only"
 		p.MethodReason = "The values lie so close together in depth that they are worth too few independent ones for a formula."
 	}
+}
+
+// Why a constant is found in one way and not another.
+const (
+	enough         = "enough"
+	unusual        = "no usual scatter"
+	scattered      = "scattered"
+	assumedScatter = "assumed"
+)
+
+// constantWay chooses the way for a constant from n independent values.
+func (e *evaluation) constantWay(estimate Estimate, n float64, scatter profile.Number) (id, why string) {
+	own, assumed := WayMeanUnknown, WayMeanKnown
+	if estimate == Fractile {
+		own, assumed = WayFractileUnknown, WayFractileKnown
+	}
+	switch {
+	case n >= manyValues:
+		return own, enough
+	case e.q.cov == 0 || !scatter.Known:
+		return own, unusual
+	case scatter.Value > e.q.cov:
+		return own, scattered
+	}
+	return assumed, assumedScatter
 }
 
 // take makes the alternative of that identifier the advised one.

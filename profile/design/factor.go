@@ -15,22 +15,9 @@ const Normal95 = 1.6448536269514722
 // of freedom, which need not be whole.
 func Student95(df float64) float64 { return studentQuantile(0.95, df) }
 
-// studentQuantile returns t with P(T ≤ t) = p for 0.5 < p < 1. The library's
-// inverse is polished by Newton's rule, because its own result is good to
-// about eight digits only for some arguments.
+// studentQuantile returns t with P(T ≤ t) = p for 0 < p < 1.
 func studentQuantile(p, df float64) float64 {
-	dist := distuv.StudentsT{Mu: 0, Sigma: 1, Nu: df}
-	t := dist.Quantile(p)
-	tail := 1 - p
-	for range 4 {
-		density := dist.Prob(t)
-		step := (studentTail(t, df) - tail) / density
-		if density == 0 || math.IsNaN(step) || math.IsInf(step, 0) {
-			break
-		}
-		t += step
-	}
-	return t
+	return distuv.StudentsT{Mu: 0, Sigma: 1, Nu: df}.Quantile(p)
 }
 
 // studentTail returns P(T > t) for t ≥ 0, by the incomplete beta function so that

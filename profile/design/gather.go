@@ -20,10 +20,10 @@ type record struct {
 	specimen string
 	depth    float64
 	result   *profile.Result // never nil; empty where the results table has no row
-	derived  *profile.DerivedResult
 	test     *profile.Test
 	curve    *profile.Curve
-	near     *profile.Test // nearest used test within nearTest, for a strength ratio
+	read     *profile.Specimen // the curve as it was read
+	near     *profile.Test     // nearest used test within nearTest, for a strength ratio
 }
 
 // A reading is a value of a quantity and what became of it.
@@ -48,6 +48,15 @@ func records(p *profile.Profile) []*record {
 		}
 		all = append(all, recordsOf(p.Site, b, bp)...)
 	}
+	specimens := map[*profile.Curve]*profile.Specimen{}
+	for i := range p.Specimens {
+		specimens[p.Specimens[i].Curve] = &p.Specimens[i]
+	}
+	for _, r := range all {
+		if r.curve != nil {
+			r.read = specimens[r.curve]
+		}
+	}
 	return all
 }
 
@@ -69,7 +78,6 @@ func recordsOf(site *profile.Site, b *profile.Borehole, bp *profile.BoreholeProf
 	if bp != nil {
 		for i := range bp.Results {
 			if rec := byResult[bp.Results[i].Result]; rec != nil {
-				rec.derived = &bp.Results[i]
 				rec.stratum = bp.Results[i].Stratum
 			}
 		}
@@ -164,6 +172,14 @@ func (r *record) orCurve(n profile.Number, of func(*profile.Curve) profile.Numbe
 	return n
 }
 
+// orSpecimen returns n, else what was read from the curve of the specimen.
+func (r *record) orSpecimen(n profile.Number, of func(*profile.Specimen) profile.Number) profile.Number {
+	if !n.Known && r.read != nil && r.read.Interpreted {
+		return of(r.read)
+	}
+	return n
+}
+
 // label names the record for a reader.
 func (r *record) label() string {
 	if r.specimen != "" {
@@ -172,8 +188,8 @@ func (r *record) label() string {
 	return fmt.Sprintf("%s at %.2f m", r.borehole, r.depth)
 }
 
-// read returns the reading of a quantity; ok is false where there is none.
-func (r *record) read(q *quantity) (reading, bool) {
+// reading returns the reading of a quantity; ok is false where there is none.
+func (r *record) reading(q *quantity) (reading, bool) {
 	n := r.decided(q.name, q.of(r))
 	if !n.Known {
 		return reading{}, false
@@ -190,11 +206,11 @@ func (r *record) read(q *quantity) (reading, bool) {
 // leftOut reports whether a quantity of the record is not to be counted: by the
 // engineer's last word, and for σ′p by what the profile made of the test.
 func (r *record) leftOut(quantity string) bool {
-	if quantity == "preconsolidation stress" && r.test != nil && !r.test.Used && r.test.Bound == profile.Exact {
+	if quantity == "preconsolidation stress" && r.test != nil && (r.test.LeftOut || !r.test.Used && r.test.Bound == profile.Exact) {
 		return true
 	}
-	d := r.decision(quantity, "leave out", "keep")
-	return d != nil && d.Decision == "leave out"
+	d := r.decision(quantity, profile.LeaveOut, profile.Keep)
+	return d != nil && d.Decision == profile.LeaveOut
 }
 
 // decided returns the value that the engineer adopted for this one specimen,
@@ -203,7 +219,7 @@ func (r *record) decided(quantity string, n profile.Number) profile.Number {
 	if quantity == "preconsolidation stress" || !n.Known {
 		return n
 	}
-	if d := r.decision(quantity, "adopt value"); d != nil && d.Value.Known {
+	if d := r.decision(quantity, profile.AdoptValue); d != nil && d.Value.Known {
 		return profile.Number{Value: d.Value.Value, Known: true, Source: d.Source}
 	}
 	return n
@@ -215,7 +231,7 @@ func (r *record) decision(quantity string, kinds ...string) *profile.Decision {
 	var last *profile.Decision
 	for i := range r.site.Decisions {
 		d := &r.site.Decisions[i]
-		if !concerns(d, r) || !about(d, quantity) {
+		if !d.Concerns(r.borehole, r.depth, r.specimen) || !about(d, quantity) {
 			continue
 		}
 		for _, k := range kinds {
@@ -225,21 +241,6 @@ func (r *record) decision(quantity string, kinds ...string) *profile.Decision {
 		}
 	}
 	return last
-}
-
-// concerns reports whether a decision is about this specimen or depth: it must
-// name one of them, to the nearest centimetre.
-func concerns(d *profile.Decision, r *record) bool {
-	if d.Borehole != "" && d.Borehole != r.borehole {
-		return false
-	}
-	if d.Specimen != "" && !strings.EqualFold(d.Specimen, r.specimen) {
-		return false
-	}
-	if d.Depth.Known && math.Abs(d.Depth.Value-r.depth) > 0.005 {
-		return false
-	}
-	return d.Specimen != "" || d.Depth.Known
 }
 
 // otherNames are what a decision may call the quantities that no column holds.

@@ -56,8 +56,15 @@ func Line(b profile.BoreholeProfile, strata []Stratum) []LinePoint {
 			UnitWeight: p.UnitWeight, Total: p.Total, Pore: p.Pore, Effective: p.Effective,
 			Tested: tested(b.Tests, p.Stratum, p.Depth),
 		}
-		if r := p.Preconsolidation; r.Known {
-			l.PreconsolidationLow, l.PreconsolidationBest, l.PreconsolidationHigh = profile.Known(r.Low), profile.Known(r.Best), profile.Known(r.High)
+		r := p.Preconsolidation
+		if r.Known && r.Bound != profile.AtMost {
+			l.PreconsolidationLow = profile.Known(r.Low)
+		}
+		if r.Known && r.Bound == profile.Exact {
+			l.PreconsolidationBest = profile.Known(r.Best)
+		}
+		if r.Known && r.Bound != profile.AtLeast {
+			l.PreconsolidationHigh = profile.Known(r.High)
 		}
 		l.choose(b.Borehole, strata)
 		line = append(line, l)

@@ -47,6 +47,9 @@ func (o Options) parameter(q *quantity, edition Edition, boreholes []string, rea
 		case r.assumed:
 			p.Assumed++
 			continue
+		case r.leftOut && r.bound != profile.Exact:
+			p.LeftOut++
+			continue
 		case r.bound != profile.Exact:
 			p.Bounds++
 			continue
@@ -82,15 +85,17 @@ func (o Options) parameter(q *quantity, edition Edition, boreholes []string, rea
 // An evaluation is a sample with what the formulas need of it.
 type evaluation struct {
 	Assumptions
-	q       *quantity
-	sample  Sample
-	scaled  Sample // on the working scale
-	flat    Sample // residuals where the trend is real, else scaled
-	line    *DepthLine
-	scale   float64 // of fluctuation, m
-	count   float64 // effective
-	average float64 // m
-	forced  bool    // a log-normal quantity with a value of zero or less
+	q      *quantity
+	sample Sample
+	scaled Sample // on the working scale
+	flat   Sample // residuals where the trend is real, else scaled
+	// flatScale is the scale of flat: that of the line where the trend is real.
+	flatScale Distribution
+	line      *DepthLine
+	scale     float64 // of fluctuation, m
+	count     float64 // effective
+	average   float64 // m
+	forced    bool    // a log-normal quantity with a value of zero or less
 }
 
 func (o Options) evaluate(q *quantity, s Sample) evaluation {
@@ -110,10 +115,15 @@ func (o Options) evaluate(q *quantity, s Sample) evaluation {
 		}
 	}
 	e.flat = e.scaled
-	if line, err := FitLine(s, e.Distribution); err == nil {
+	e.flatScale = e.Distribution
+	if line, err := FitTrend(s, e.Distribution); err == nil {
 		e.line = &line
 		if line.Real() {
-			e.flat = line.residuals(e.scaled)
+			e.flatScale = line.Distribution
+			if e.flatScale == Normal {
+				e.flat = s
+			}
+			e.flat = line.residuals(e.flat)
 		}
 	}
 	return e
@@ -153,6 +163,7 @@ func (p *Parameter) fill(e evaluation) {
 			p.Alternatives = append(p.Alternatives, e.alternative("spatial-average", name, Mean, i, "after Vanmarcke 1977", MarkDerived))
 		}
 	}
+	p.Looks = looksOf(e)
 	if e.line == nil {
 		return
 	}
@@ -160,7 +171,6 @@ func (p *Parameter) fill(e evaluation) {
 	if e.line.N >= fewValues {
 		p.Alternatives = append(p.Alternatives, e.lines()...)
 	}
-	p.Looks = looksOf(e)
 }
 
 // alternative makes a row of what a way gives, with impossible values not known.
@@ -248,26 +258,12 @@ func depthsBetween(from, to float64) []float64 {
 func looksOf(e evaluation) []Look {
 	looks := Looks(e.flat)
 	for i := range looks {
-		if e.Distribution == LogNormal || e.line.Real() {
-			for _, o := range e.sample {
-				if o.Borehole == looks[i].Borehole && o.Depth == looks[i].Depth && o.Label == looks[i].Label && e.flatOf(o) == looks[i].Value {
-					looks[i].Observation = o
-					break
-				}
+		for k, o := range e.flat {
+			if o == looks[i].Observation {
+				looks[i].Observation = e.sample[k]
+				break
 			}
 		}
 	}
 	return looks
-}
-
-// flatOf returns an observation as it is in e.flat.
-func (e *evaluation) flatOf(o Observation) float64 {
-	v := o.Value
-	if e.Distribution == LogNormal {
-		v = math.Log(v)
-	}
-	if e.line.Real() {
-		v -= e.line.at(o.Depth)
-	}
-	return v
 }

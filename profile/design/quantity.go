@@ -123,12 +123,11 @@ var quantities = []quantity{
 		governs: []Governs{{"stability and bearing", Low}, {"downdrag and drivability", High}}, unsafe: "downdrag and drivability", of: strengthRatio},
 }
 
-// exact returns n as a known exact value, or not known.
+// exact reports whether n is known and is the value itself, not a bound on it.
 func exact(n profile.Number) bool { return n.Known && n.Bound == profile.Exact }
 
 func curveWater(c *profile.Curve) profile.Number   { return c.WaterContent }
 func curveGravity(c *profile.Curve) profile.Number { return c.SpecificGravity }
-func curveVoid(c *profile.Curve) profile.Number    { return c.InitialVoidRatio }
 
 func plasticity(r *record) profile.Number {
 	if r.result.PlasticityIndex.Known {
@@ -141,7 +140,10 @@ func plasticity(r *record) profile.Number {
 	return profile.Number{Value: ll.Value - pl.Value, Known: true, Assumed: ll.Assumed || pl.Assumed, Source: ll.Source}
 }
 
-func voidRatio(r *record) profile.Number { return r.orCurve(r.result.VoidRatio, curveVoid) }
+func voidRatio(r *record) profile.Number {
+	n := r.orCurve(r.result.VoidRatio, func(c *profile.Curve) profile.Number { return c.InitialVoidRatio })
+	return r.orSpecimen(n, func(s *profile.Specimen) profile.Number { return s.InitialVoidRatio })
+}
 
 func preconsolidation(r *record) profile.Number {
 	if r.test == nil || !r.test.Preconsolidation.Known {
@@ -172,17 +174,24 @@ func bounded(n profile.Number, b profile.Bound) profile.Number {
 	return n
 }
 
+// compression returns Cc as the laboratory reports it, else as the curve was read.
+// Where the curve stopped before its virgin line either is a lower bound, unless
+// the engineer keeps it.
 func compression(r *record) profile.Number {
-	n := r.result.CompressionIndex
-	if !n.Known && r.derived != nil {
-		n = r.derived.MeasuredCc
+	n := r.orSpecimen(r.result.CompressionIndex, func(s *profile.Specimen) profile.Number { return s.CompressionIndex })
+	if n.Known && r.read != nil && r.read.Bound == profile.AtLeast && r.decision("compression index", profile.Keep, profile.LeaveOut) == nil {
+		n.Bound = profile.AtLeast
 	}
 	return n
 }
 
-func recompression(r *record) profile.Number { return r.result.RecompressionIndex }
+func recompression(r *record) profile.Number {
+	return r.orSpecimen(r.result.RecompressionIndex, func(s *profile.Specimen) profile.Number { return s.Recompression })
+}
 
-func swelling(r *record) profile.Number { return r.result.SwellingIndex }
+func swelling(r *record) profile.Number {
+	return r.orSpecimen(r.result.SwellingIndex, func(s *profile.Specimen) profile.Number { return s.Swelling })
+}
 
 // perVolume returns an index as a ratio, index/(1 + e0), from one specimen.
 func perVolume(name string, index func(*record) profile.Number) func(*record) profile.Number {

@@ -70,6 +70,43 @@ func FitLine(s Sample, d Distribution) (DepthLine, error) {
 	return l, nil
 }
 
+// straighter is how much better, as a difference of −2 ln likelihood, a line through
+// the values themselves must fit before it replaces one through their logarithms.
+// The rule of Burnham & Anderson for a supported model (from memory, unverified).
+const straighter = 4
+
+// FitTrend returns the line of a quantity with depth. A log-normal quantity gets a
+// line through its logarithms, unless a line through the values is clearly better,
+// as it is where σ′p grows straight with σ′v0 over a great depth:
+//
+//	n·ln(Σr²/n)  against  n·ln(Σr_ln²/n) + 2Σ ln x
+//
+// The errors are those of FitLine.
+func FitTrend(s Sample, d Distribution) (DepthLine, error) {
+	l, err := FitLine(s, d)
+	if err != nil || d == Normal {
+		return l, err
+	}
+	straight, err := FitLine(s, Normal)
+	switch {
+	case err != nil:
+		return l, err
+	case straight.SD == 0:
+		return straight, nil
+	case l.SD == 0:
+		return l, nil
+	}
+	n := float64(l.N)
+	gain := 2 * n * math.Log(l.SD/straight.SD)
+	for _, o := range s.ordered() {
+		gain += 2 * math.Log(o.Value)
+	}
+	if gain > straighter {
+		return straight, nil
+	}
+	return l, nil
+}
+
 // slopeChance returns the two-sided chance of the slope. Values that are equal
 // but for rounding have no slope, and a line through every value has no chance.
 func slopeChance(l DepthLine, total, df float64) float64 {

@@ -71,6 +71,7 @@ type Parameter struct {
 	Looks        []Look         `json:"looks,omitempty"`
 	Observations []Observation  `json:"observations"`
 	Warnings     []string       `json:"warnings"`
+	facts        []string       // the warnings that are of what was measured
 }
 
 // Values returns the values of every stratum across boreholes, in the order in
@@ -157,7 +158,7 @@ func (o Options) stratum(site *profile.Site, name, scope string, boreholes []str
 			if scope != "" && r.borehole != scope {
 				continue
 			}
-			if v, ok := r.read(q); ok {
+			if v, ok := r.reading(q); ok {
 				if o.WeightByGrade && q.graded {
 					v.Weight = gradeWeight(r.test.Grade)
 				}
@@ -175,10 +176,42 @@ func (o Options) stratum(site *profile.Site, name, scope string, boreholes []str
 		p.adopt(adopted, scope, s.Boreholes)
 		s.Parameters = append(s.Parameters, p)
 	}
+	s.relateHistory()
 	if scope == "" {
 		s.Notes = book.loose
 	}
 	return s, nil
+}
+
+// relateHistory says of a σ′p that changes with depth whether a constant OCR or
+// POP, which follow the ground and not a ruler, would describe it with one value.
+func (s *Stratum) relateHistory() {
+	stress := s.parameter("preconsolidation stress")
+	if stress == nil || stress.Trend == nil || !stress.Trend.Real {
+		return
+	}
+	var steady []string
+	for _, name := range []string{"OCR", "POP"} {
+		if p := s.parameter(name); p != nil && p.Trend != nil && !p.Trend.Real {
+			steady = append(steady, name)
+		}
+	}
+	switch len(steady) {
+	case 1:
+		stress.fact("%s shows no trend with depth here: it describes the stratum with one value, and follows σ′v0.", steady[0])
+	case 2:
+		stress.fact("Neither OCR nor POP shows a trend with depth here: the results do not tell which of them is constant.")
+	}
+}
+
+// parameter returns the parameter of that name, or nil.
+func (s *Stratum) parameter(name string) *Parameter {
+	for i := range s.Parameters {
+		if s.Parameters[i].Parameter == name {
+			return &s.Parameters[i]
+		}
+	}
+	return nil
 }
 
 // gradeWeight is the weight of a test by its grade. Choice of this program.
@@ -214,7 +247,7 @@ func WithoutDesign(strata []Stratum) []Stratum {
 			p := &out[i].Parameters[j]
 			p.Low, p.High, p.Adopted, p.AssumedCOV = profile.Number{}, profile.Number{}, profile.Number{}, profile.Number{}
 			p.Way, p.Method, p.MethodReason, p.Reason, p.Term, p.COVSource = "", "", "", "", "", ""
-			p.Alternatives, p.Adoptions = nil, nil
+			p.Alternatives, p.Adoptions, p.Warnings = []Alternative{}, nil, append([]string{}, p.facts...)
 			if p.Trend != nil {
 				t := *p.Trend
 				t.Points = nil

@@ -1,7 +1,6 @@
 package design
 
 import (
-	"fmt"
 	"math"
 	"sort"
 )
@@ -11,18 +10,8 @@ import (
 type weakRun struct {
 	from, to   float64 // m
 	n          int
-	here, rest float64 // means of the quantity
+	difference float64 // of its mean from that of the rest, on the scale compared
 	p          float64
-}
-
-// text warns of the run.
-func (w weakRun) text(unit string) string {
-	direction := "lower"
-	if w.here > w.rest {
-		direction = "higher"
-	}
-	return fmt.Sprintf("The %d values between %.2f and %.2f m are %s than the rest (mean %s against %s, p = %s): one value for the stratum hides a zone.",
-		w.n, w.from, w.to, direction, number(w.here), quantityText(w.rest, unit), chance(w.p))
 }
 
 // weakZone looks for a run of two or more values, at most half of them, whose mean
@@ -81,15 +70,11 @@ func weakZone(sample, flat Sample, side string, limit float64) (weakRun, bool) {
 	if p >= limit {
 		return weakRun{}, false
 	}
-	w := weakRun{from: sample[order[best]].Depth, to: sample[order[best+length-1]].Depth, n: length, p: p}
-	for i, k := range order {
-		if i >= best && i < best+length {
-			w.here += sample[k].Value / float64(length)
-		} else {
-			w.rest += sample[k].Value / float64(n-length)
-		}
-	}
-	return w, true
+	here := sum[best+length] - sum[best]
+	return weakRun{
+		from: sample[order[best]].Depth, to: sample[order[best+length-1]].Depth, n: length, p: p,
+		difference: here/float64(length) - (sum[n]-here)/float64(n-length),
+	}, true
 }
 
 // runDifference returns Student's t of the mean of k values against the mean of
