@@ -10,8 +10,11 @@ import (
 const (
 	leastMaxRatio   = 2.5  // highest stress over apparent σ′p
 	largestQ        = 1.5  // slope of the last doubling over the one before
-	doubtfulQ       = 1.2  // twice in a row
+	doubtfulQ       = 1.2  // twice in a row, or with a doubtful end of the test
+	doubtfulRatio   = 4.0  // highest stress over apparent σ′p below which doubtfulQ decides
+	notReached      = 0.8  // of the last load: what a flat curve has surely not reached yield at
 	leastBreak      = 2.0  // virgin slope over recompression slope
+	leastStrain     = 0.02 // compression past the apparent σ′p
 	virginRatio     = 0.12 // compression ratio from which a straight curve is virgin
 	recompressRatio = 0.04 // compression ratio below which a straight curve is recompression
 )
@@ -26,16 +29,19 @@ func (r *reading) gate() {
 	first := in.s[in.first]
 	switch {
 	case !r.breaks():
-		r.noBreak()
+		r.noBreak("no clear break in the curve", first)
+	case a.Best < virginStart*first:
+		r.noBreak("the constructions meet where fewer than two loads lie before", math.Max(first, a.High))
 	case r.q.Known && q > largestQ:
 		r.atLeast(fmt.Sprintf("the curve is still steepening at its end: slope of the last doubling of stress %.2f times that before (limit %.1f)", q, largestQ))
 	case ratio < leastMaxRatio:
 		r.atLeast(fmt.Sprintf("the test ended at %.4g kPa, %.1f times the apparent yield stress (limit %.1f)", in.last(), ratio, leastMaxRatio))
+	case r.q.Known && q > doubtfulQ && ratio < doubtfulRatio:
+		r.atLeast(fmt.Sprintf("the test ended at %.1f times the apparent yield stress and the curve was still steepening there (slope %.2f times that before; limits %.0f and %.1f)", ratio, q, doubtfulRatio, doubtfulQ))
 	case r.q.Known && q > doubtfulQ && before > doubtfulQ:
 		r.atLeast(fmt.Sprintf("the curve never becomes straight: the slope grew %.2f and %.2f times over the last doublings of stress (limit %.1f)", before, q, doubtfulQ))
-	case a.Best < first:
-		r.bound, r.why = AtMost, fmt.Sprintf("the constructions meet below the first usable stress of %.4g kPa", first)
-		r.yield = Yield{first, first, first, AtMost}
+	case r.strainPast(a.Best) < leastStrain:
+		r.atLeast(fmt.Sprintf("only %.1f %% of compression past the apparent yield stress (limit %.0f %%)", 100*r.strainPast(a.Best), 100*leastStrain))
 	default:
 		r.bound, r.yield = Exact, a
 	}
@@ -56,17 +62,32 @@ func (r *reading) breaks() bool {
 	return in.virgin.steepest > leastBreak*math.Max(flattest, 0) && !math.IsInf(flattest, 1)
 }
 
-// atLeast makes the low side of what the constructions say a lower bound.
+// strainPast returns the strain from a stress to the end of the test.
+func (r *reading) strainPast(stress float64) float64 {
+	in := r.in
+	e, ok := interpolate(in.s, in.e, stress)
+	if !ok {
+		e = in.e[in.first]
+	}
+	return (e - in.e[len(in.e)-1]) / (1 + in.e0)
+}
+
+// atLeast makes what the constructions say, less one standard deviation, a lower
+// bound: on a test that stopped early they read low.
 func (r *reading) atLeast(why string) {
 	r.bound, r.why = AtLeast, why
-	b := math.Min(r.apparent.Low, r.in.last())
+	b := math.Min(r.apparent.Best*math.Exp(-r.parts.Total), r.in.last())
 	r.yield = Yield{b, b, b, AtLeast}
 }
 
-// noBreak judges a curve without a yield from its slope.
-func (r *reading) noBreak() {
+// noBreak judges a curve without a visible yield from its slope: virgin
+// compression and recompression differ by a factor of five and more in one soil,
+// and in compression ratio even between soils.
+// highest is the stress that yield surely lies below on a curve that is steep
+// throughout.
+func (r *reading) noBreak(what string, highest float64) {
 	in := r.in
-	first, last := in.s[in.first], in.last()
+	last := in.last()
 	line, ok := fit(in.x, in.e, in.first, len(in.x)-1)
 	slope := 0.0
 	if ok {
@@ -74,15 +95,14 @@ func (r *reading) noBreak() {
 	}
 	switch {
 	case slope >= virginRatio:
-		r.bound = AtMost
-		r.why = fmt.Sprintf("no break in the curve, steep throughout (compression ratio %.2f): the yield stress lies below the first load of %.4g kPa, or the specimen is disturbed", slope, first)
-		r.yield = Yield{first, first, first, AtMost}
+		r.bound, r.yield = AtMost, Yield{highest, highest, highest, AtMost}
+		r.why = fmt.Sprintf("%s, steep throughout (compression ratio %.2f): the yield stress lies below the tested stresses, or the specimen is disturbed", what, slope)
 	case slope <= recompressRatio && slope >= 0:
-		r.bound = AtLeast
-		r.why = fmt.Sprintf("no break in the curve, flat throughout (compression ratio %.3f): the yield stress was not reached", slope)
-		r.yield = Yield{last, last, last, AtLeast}
+		b := notReached * last
+		r.bound, r.yield = AtLeast, Yield{b, b, b, AtLeast}
+		r.why = fmt.Sprintf("%s, flat throughout (compression ratio %.3f): the yield stress was not reached", what, slope)
 	default:
 		r.bound = Undetermined
-		r.why = fmt.Sprintf("no break in the curve, and its slope (compression ratio %.2f) does not tell virgin compression from recompression", slope)
+		r.why = fmt.Sprintf("%s, and its slope (compression ratio %.2f) does not tell virgin compression from recompression", what, slope)
 	}
 }

@@ -35,7 +35,21 @@ func (r *Interpretation) grade(read reading, step float64, c Curve) {
 	}
 	notB(r.Spread > 1.35, fmt.Sprintf("methods differ by a factor of %.2f; B wants at most 1.35", r.Spread))
 	notA(r.Spread > 1.2 && r.Spread <= 1.35, fmt.Sprintf("methods differ by a factor of %.2f; A wants at most 1.2", r.Spread))
-	notA(step > 1.55, fmt.Sprintf("load step of factor %.2f around σ′p; A wants at most 1.5", step))
+	notA(step > 1.55 && step <= 2.2, fmt.Sprintf("load step of factor %.2f around σ′p; A wants at most 1.5", step))
+	if f := read.in.virgin.flattening; f > 0.05 {
+		// Where the steepest part begins is hidden between two loads.
+		notB(step > 1.55 && f > 0.1, fmt.Sprintf("the curve flattens by %.0f %% past its steepest part, with a load step of factor %.2f at yield", 100*f, step))
+		notA(!(step > 1.55 && f > 0.1), fmt.Sprintf("the curve flattens by %.0f %% past its steepest part", 100*f))
+	}
+	before := 0
+	for _, s := range read.in.s[read.in.first:] {
+		if s <= recompressionEnd*r.Preconsolidation.Best {
+			before++
+		}
+	}
+	notB(before < 2, fmt.Sprintf("%d load clear of the bend before σ′p; B wants 2", before))
+	notB(step > 2.2, fmt.Sprintf("load step of factor %.2f around σ′p; B wants at most doubling", step))
+	notB(r.FirstLoadStrain > largeFirstLoad, fmt.Sprintf("the first load alone took %.1f %% of strain", r.FirstLoadStrain))
 	notB(class == 4, "sample quality very poor")
 	notA(class == 3, "sample quality poor")
 	notA(class == 0, "sample quality not rated")

@@ -31,6 +31,8 @@ func Interpret(c Curve, s Situation) (Interpretation, error) {
 		Apparent:            read.apparent,
 		InitialVoidRatio:    c.InitialVoidRatio,
 		InitialVoidRatioHow: c.InitialVoidRatioHow,
+		Loading:             l.points(),
+		Uncertainty:         read.parts,
 		Stages:              c.stageResults(),
 		MaxStress:           l.last(),
 		StillSteepening:     read.q,
@@ -40,7 +42,9 @@ func Interpret(c Curve, s Situation) (Interpretation, error) {
 	}
 	r.Preconsolidation.Bound = read.bound
 	r.virginLines(read.in)
-	r.recompression(read.in, how, loop)
+	if loop || read.breaks() {
+		r.recompression(read.in, how, loop)
+	}
 	step := 0.0
 	if read.apparent.Best > 0 {
 		r.MaxStressRatio = r.MaxStress / read.apparent.Best
@@ -53,8 +57,11 @@ func Interpret(c Curve, s Situation) (Interpretation, error) {
 			}
 		}
 	}
-	r.Quality = c.rate(l, s, read.yield, read.apparent.Best)
+	r.Quality = c.rate(l, s, r.Preconsolidation)
 	r.Field = c.field(s, r.Preconsolidation, r.RecompressionIndex, r.VirginSteepest)
+	if r.FirstLoadStrain = c.firstLoadStrain(l); r.FirstLoadStrain > largeFirstLoad {
+		r.Notes = append(r.Notes, fmt.Sprintf("the first load alone compressed the specimen by %.1f %%: seating, gaps, or a disturbed specimen", r.FirstLoadStrain))
+	}
 	for _, lp := range c.loops() {
 		if lp.reload > lp.bottom {
 			r.Loops = append(r.Loops, c.checkLoop(lp, around))
@@ -63,6 +70,25 @@ func Interpret(c Curve, s Situation) (Interpretation, error) {
 	r.grade(read, step, c)
 	r.remark(c, read)
 	return r, nil
+}
+
+// largeFirstLoad is the strain in percent under the first load from which its
+// seating is in doubt.
+const largeFirstLoad = 4.0
+
+// firstLoadStrain returns the strain in percent from the initial void ratio to
+// the first load; zero where the initial void ratio is that of the first load.
+func (c Curve) firstLoadStrain(l *loading) float64 {
+	return math.Max(0, 100*(c.InitialVoidRatio-l.e[l.first])/(1+c.InitialVoidRatio))
+}
+
+// points returns the loading for drawing.
+func (l *loading) points() []LoadingPoint {
+	out := make([]LoadingPoint, len(l.s))
+	for i := range out {
+		out[i] = LoadingPoint{l.s[i], l.e[i], 100 * (l.e0 - l.e[i]) / (1 + l.e0), l.work[i]}
+	}
+	return out
 }
 
 // fine reports whether the load steps are small enough for tangent moduli.

@@ -56,6 +56,9 @@ type Interpretation struct {
 	InitialVoidRatio    float64
 	InitialVoidRatioHow string
 
+	Loading     []LoadingPoint // first loading as the constructions saw it: averaged where the record is dense
+	Uncertainty Uncertainty    // of the apparent value, natural log
+
 	Stages  []StageResult
 	Quality []Quality
 	Field   Field
@@ -66,6 +69,7 @@ type Interpretation struct {
 	Notes   []string
 
 	BracketLow, BracketHigh float64 // applied stresses on either side of the yield stress, kPa; 0 where outside
+	FirstLoadStrain         float64 // percent
 	MaxStress               float64 // highest applied stress, kPa
 	MaxStressRatio          float64 // MaxStress over the apparent σ′p; 0 where there is none
 	StillSteepening         Number  // q: slope of the last doubling over that of the doubling before
@@ -81,10 +85,20 @@ type Method struct {
 	Stress    float64 // as constructed, kPa
 	Low, High float64 // 5 and 95 % points after its known bias and scatter, kPa
 	Used      bool    // it enters the combined value
+	Corrected float64 // after its known bias, kPa; 0 where it is not used
+	Weight    float64 // its share of the combined value
 	Note      string  // why not, or what there is to say
 	Lines     []DrawnLine
 	Points    []int  // indices in Curve.Points of the points that made its lines
 	Mark      string // how far its steps were verified
+}
+
+// A LoadingPoint is one point of first loading with its work.
+type LoadingPoint struct {
+	EffectiveStress float64 // kPa
+	VoidRatio       float64
+	Strain          float64 // percent of the initial height
+	Work            float64 // cumulative, per unit volume, kJ/m³
 }
 
 // A VirginLine is e = Intercept − Slope·log10 σ′.

@@ -34,10 +34,14 @@ func firstLoading(c Curve) *loading {
 	var points []int
 	highest := 0.0
 	for i, p := range c.Points {
-		if (p.Branch == FirstLoading || p.Branch == FurtherLoading) && p.EffectiveStress > highest {
+		if p.Branch != FirstLoading && p.Branch != FurtherLoading {
+			continue
+		}
+		switch n := len(points); {
+		case p.EffectiveStress > highest:
 			points = append(points, i)
 			highest = p.EffectiveStress
-		} else if n := len(points); n > 0 && p.EffectiveStress == highest && i == points[n-1]+1 {
+		case p.EffectiveStress == highest && i == points[n-1]+1:
 			points[n-1] = i // the same stress again: where the specimen came to rest
 		}
 	}
@@ -61,6 +65,9 @@ func newLoading(all []Point, points []int, e0 float64) *loading {
 	l.addWork()
 	if n > denseCount {
 		l.average()
+	}
+	if n <= denseCount {
+		l.merge()
 	}
 	for l.first < len(l.s)-MinimumPoints && l.s[l.first] < SeatingStress {
 		l.first++
@@ -87,11 +94,12 @@ func (l *loading) addWork() {
 // summed over all points before, so that binning does not coarsen it.
 func (l *loading) average() {
 	out := &loading{e0: l.e0, start: l.start, dense: true}
+	// Bins count from the first stress, so that units of stress do not matter.
+	bin := func(i int) float64 { return math.Floor((l.x[i] - l.x[0]) * binsPerCycle) }
 	for i := 0; i < len(l.x); {
-		bin := math.Floor(l.x[i] * binsPerCycle)
 		var x, e, w float64
 		j := i
-		for ; j < len(l.x) && math.Floor(l.x[j]*binsPerCycle) == bin; j++ {
+		for ; j < len(l.x) && bin(j) == bin(i); j++ {
 			x, e, w = x+l.x[j], e+l.e[j], w+l.work[j]
 		}
 		n := float64(j - i)
@@ -103,6 +111,21 @@ func (l *loading) average() {
 		i = j
 	}
 	*l = *out
+}
+
+// merge drops a point that is followed by another at nearly the same stress: the
+// later one is where the specimen came to rest, and a slope between the two would
+// be one of noise.
+func (l *loading) merge() {
+	k := 0
+	for i := range l.s {
+		if i+1 < len(l.s) && l.s[i+1] < l.s[i]*(1+reversal) {
+			continue
+		}
+		l.x[k], l.s[k], l.e[k], l.origin[k], l.work[k] = l.x[i], l.s[i], l.e[i], l.origin[i], l.work[i]
+		k++
+	}
+	l.x, l.s, l.e, l.origin, l.work = l.x[:k], l.s[:k], l.e[:k], l.origin[:k], l.work[:k]
 }
 
 // without returns the loading with the points from first to last left out.
@@ -132,8 +155,7 @@ func (l *loading) disturbed(change float64, sign func(i int) float64) *loading {
 // last returns the highest stress of the loading.
 func (l *loading) last() float64 { return l.s[len(l.s)-1] }
 
-// increment returns the stress ratio of the load step around stress s, and the
-// stresses before and after it.
+// bracket returns the applied stresses before and after stress s.
 func (l *loading) bracket(s float64) (low, high float64, ok bool) {
 	for i := 1; i < len(l.s); i++ {
 		if l.s[i-1] <= s && s <= l.s[i] {

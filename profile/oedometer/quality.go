@@ -28,7 +28,7 @@ const (
 )
 
 // rate returns the sample quality by both schemes.
-func (c Curve) rate(l *loading, s Situation, yield Yield, apparent float64) []Quality {
+func (c Curve) rate(l *loading, s Situation, yield Yield) []Quality {
 	lunne := Quality{Scheme: lunneScheme, Mark: markMemory}
 	sqd := Quality{Scheme: designationScheme, Unit: "%", Mark: markMemory}
 	e, why := c.voidRatioInSitu(l, s)
@@ -37,8 +37,8 @@ func (c Curve) rate(l *loading, s Situation, yield Yield, apparent float64) []Qu
 	}
 	ocr := 0.0
 	if why == "" {
-		// Of a bound the ratio is at least what the bound gives.
-		ocr = math.Max(yield.Best, apparent) / s.EffectiveStress.Value
+		// Of a bound the ratio is what the bound gives; of none the first row.
+		ocr = yield.Best / s.EffectiveStress.Value
 		if ocr > largestRatedOCR {
 			why = fmt.Sprintf("σ′p/σ′v0 is %.1f: above %.0f the strain to σ′v0 says little about disturbance", ocr, largestRatedOCR)
 		}

@@ -14,6 +14,7 @@ type reading struct {
 	why      string // why it is a bound
 	notes    []string
 	spread   float64
+	parts    Uncertainty
 	q        Number
 }
 
@@ -28,18 +29,19 @@ func readLoading(l *loading, around surroundings) reading {
 	}
 	if !ok {
 		r.methods = blankMethods("no two lines can be told apart")
-		r.noBreak()
+		r.noBreak("no clear break in the curve", l.s[l.first])
 		return r
 	}
 	outcomes := in.values()
-	mean, disagreement, ok := combine(outcomes)
+	mean, disagreement, ok := combine(outcomes, in.virgin.flattening)
 	if !ok {
 		r.methods = blankMethods("no construction gave a value")
-		r.noBreak()
+		r.noBreak("no clear break in the curve", l.s[l.first])
 		return r
 	}
 	best := math.Exp(mean)
-	sd := in.deviation(around, mean, disagreement, outcomes)
+	r.parts = in.uncertainty(around, mean, disagreement)
+	sd := r.parts.Total
 	r.apparent = Yield{Low: math.Exp(mean - ninety*sd), Best: best, High: math.Exp(mean + ninety*sd)}
 	r.report(outcomes)
 	r.gate()
@@ -48,21 +50,32 @@ func readLoading(l *loading, around surroundings) reading {
 
 // report turns outcomes into methods and sets their spread.
 func (r *reading) report(outcomes []outcome) {
-	low, high, n := math.Inf(1), 0.0, 0
+	low, high, n, weights := math.Inf(1), 0.0, 0, 0.0
 	for i, o := range outcomes {
 		c := constructions[i]
-		m := Method{ID: c.id, Name: c.name, Mark: c.mark, Note: o.note, Known: o.ok, Used: o.ok, Lines: o.lines}
+		known, calibrated := calibrations[c.id]
+		m := Method{ID: c.id, Name: c.name, Mark: c.mark, Note: o.note, Known: o.ok, Used: o.ok && calibrated, Lines: o.lines}
 		if o.ok {
-			known := calibrations[c.id]
-			m.Stress = o.stress
-			m.Low = o.stress * math.Exp(-known.bias-ninety*known.scatter)
-			m.High = o.stress * math.Exp(-known.bias+ninety*known.scatter)
+			m.Stress, m.Low, m.High = o.stress, o.stress, o.stress
+		}
+		if m.Used {
+			bias := known.at(r.in.virgin.flattening)
+			m.Low = o.stress * math.Exp(-bias-ninety*known.scatter)
+			m.High = o.stress * math.Exp(-bias+ninety*known.scatter)
+			m.Corrected = o.stress * math.Exp(-bias)
+			m.Weight = weight(known, o)
+			weights += m.Weight
 			low, high, n = math.Min(low, o.stress), math.Max(high, o.stress), n+1
 		}
 		for _, k := range o.points {
 			m.Points = append(m.Points, r.in.origin[k])
 		}
 		r.methods = append(r.methods, m)
+	}
+	for i := range r.methods {
+		if r.methods[i].Used {
+			r.methods[i].Weight /= weights
+		}
 	}
 	if n > 1 {
 		r.spread = high / low

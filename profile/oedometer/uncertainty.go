@@ -4,46 +4,76 @@ import "math"
 
 // How the parts of the uncertainty are weighed. Measured on generated curves.
 const (
-	modelScatter   = 0.05 // of the combined value itself, natural log
-	bracketShare   = 0.06 // of the log width of the load step around σ′p
-	noiseRuns      = 16   // rows of the sign design
-	leaveOutBlocks = 10   // a dense record is left out in this many parts
+	modelScatter   = 0.025 // of the combined value itself, natural log
+	shapeScatter   = 0.4   // of the correction for flattening, per unit of it
+	bracketShare   = 0.06  // of the log width of the load step around σ′p
+	readingNoise   = 0.002 // in e, of a single reading
+	denseAveraging = 3     // each point of a dense record is a mean of many readings
+	noiseRuns      = 16    // rows of the sign design
+	leaveOutBlocks = 10    // a dense record is left out in this many parts
 )
 
-// deviation returns the standard deviation of ln σ′p of the combined value: what
-// the constructions are known to scatter, the load step around the value, how far
-// it moves when a point is left out or the readings are disturbed by 0.002 in e,
-// and how far the constructions differ beyond their known biases.
-func (in *input) deviation(around surroundings, mean, disagreement float64, outcomes []outcome) float64 {
+// An Uncertainty is the standard deviation of ln σ′p with its parts, each a
+// standard deviation of its own.
+type Uncertainty struct {
+	Model        float64 // what the combined value is known to scatter on good curves
+	Shape        float64 // of the correction for a curve that flattens again
+	LoadStep     float64 // of the load step around the value
+	LeaveOneOut  float64 // jackknife: each point left out in turn
+	ReadingNoise float64 // every void ratio changed by ±0.002, in a fixed design of signs
+	VirginRule   float64 // virgin line of segments from 0.8 or 0.95 of the steepest
+	Disagreement float64 // half of what the constructions differ by beyond their known biases
+	Total        float64
+}
+
+// uncertainty returns the parts and their total. Leaving out points, noise and
+// the virgin rule all see the scatter of the readings: the largest counts.
+func (in *input) uncertainty(around surroundings, mean, disagreement float64) Uncertainty {
 	around.detail = false
-	leave := in.leaveOneOut(around, mean)
-	noise := in.noise(around, mean)
-	step := 0.0
-	if low, high, ok := in.bracket(math.Exp(mean)); ok {
-		step = bracketShare * math.Log(high/low)
+	u := Uncertainty{
+		Model:        modelScatter,
+		Shape:        shapeScatter * in.virgin.flattening,
+		LeaveOneOut:  in.leaveOneOut(around, mean),
+		ReadingNoise: in.noise(around, mean),
+		VirginRule:   in.virginRule(around, mean),
+		Disagreement: disagreement / 2,
 	}
-	// Leaving out and noise both see the scatter of the readings: the larger.
-	moved := math.Max(leave, noise)
-	return math.Sqrt(modelScatter*modelScatter + step*step + moved*moved + disagreement*disagreement/4)
+	if low, high, ok := in.bracket(math.Exp(mean)); ok {
+		u.LoadStep = bracketShare * math.Log(high/low)
+	}
+	moved := max(u.LeaveOneOut, u.ReadingNoise, u.VirginRule)
+	for _, part := range []float64{u.Model, u.Shape, u.LoadStep, moved, u.Disagreement} {
+		u.Total += part * part
+	}
+	u.Total = math.Sqrt(u.Total)
+	return u
 }
 
 // combined returns ln σ′p of a changed loading.
-func combined(l *loading, around surroundings) (float64, bool) {
-	in, ok := newInput(l, around, virginShare)
+func combined(l *loading, around surroundings, share float64) (float64, bool) {
+	in, ok := newInput(l, around, share)
 	if !ok {
 		return 0, false
 	}
-	mean, _, ok := combine(in.values())
+	mean, _, ok := combine(in.values(), in.virgin.flattening)
 	return mean, ok
 }
 
-// leaveOneOut returns the jackknife deviation of ln σ′p: each point, or each
-// block of a dense record, left out in turn.
-//
-//	sd² = (n−1)/n Σ(y_i − ȳ)²
-//
-// Neighbours are not independent of each other on so few points, and a leverage
-// point at the knee would rule it: each departure is held to 0.3.
+// virginRule returns the larger change of ln σ′p under two other thresholds of
+// the virgin line, halved as both are at the edge of what is reasonable.
+func (in *input) virginRule(around surroundings, mean float64) float64 {
+	largest := 0.0
+	for _, share := range []float64{0.8, 0.95} {
+		if y, ok := combined(in.loading, around, share); ok {
+			largest = math.Max(largest, math.Abs(y-mean))
+		}
+	}
+	return largest / 2
+}
+
+// leaveOneOut returns the root mean square change of ln σ′p when each point, or
+// each block of a dense record, is left out in turn. A point at the knee would
+// rule it: each change is held to 0.3.
 func (in *input) leaveOneOut(around surroundings, mean float64) float64 {
 	n := len(in.s) - in.first
 	if n <= MinimumPoints {
@@ -55,7 +85,7 @@ func (in *input) leaveOneOut(around surroundings, mean float64) float64 {
 	}
 	var squares, count float64
 	for i := in.first; i < len(in.s); i += block {
-		y, ok := combined(in.without(i, min(i+block, len(in.s))-1), around)
+		y, ok := combined(in.without(i, min(i+block, len(in.s))-1), around, virginShare)
 		if !ok {
 			continue
 		}
@@ -74,12 +104,12 @@ func (in *input) leaveOneOut(around surroundings, mean float64) float64 {
 func (in *input) noise(around surroundings, mean float64) float64 {
 	amplitude := readingNoise
 	if in.dense {
-		amplitude /= 3 // each point is a mean of many readings
+		amplitude /= denseAveraging
 	}
 	var squares, count float64
 	for run := range noiseRuns {
 		l := in.disturbed(amplitude, func(i int) float64 { return sign(run, i) })
-		y, ok := combined(l, around)
+		y, ok := combined(l, around, virginShare)
 		if !ok {
 			continue
 		}

@@ -4,12 +4,13 @@ import "math"
 
 // Rules for the virgin line.
 const (
-	virginShare  = 0.9  // of the steepest slope: segments this steep count as virgin
-	segmentWidth = 0.15 // log cycles; shorter segments are slopes of noise
-	readingNoise = 0.002
-	sShapeShare  = 0.8 // last slope below this share of the steepest: S-shaped
-	lastCycle    = 0.5 // log cycles of a dense record that its "last points" cover
-	lastPoints   = 3
+	virginShare     = 0.9   // of the steepest slope: segments this steep count as virgin
+	segmentWidth    = 0.25  // log cycles; shorter segments are slopes of noise
+	printedStep     = 0.001 // the last digit of a printed void ratio
+	sShape          = 0.15  // flattening from which the curve counts as S-shaped
+	flatteningNoise = 1.5   // standard deviations of noise that flattening must exceed
+	lastCycle       = 0.5   // log cycles of a dense record that its "last points" cover
+	lastPoints      = 3
 )
 
 // A virgin is the virgin compression line of a loading.
@@ -17,6 +18,7 @@ type virgin struct {
 	line        straight
 	first, last int     // points of the loading that made it
 	steepest    float64 // S*, the steepest segment
+	flattening  float64 // 1 − slope of the last points over that of the line, 0 to 0.6
 	sShaped     bool    // the curve flattens again past its steepest part
 	ok          bool
 }
@@ -63,7 +65,7 @@ func (l *loading) virginLine(share float64) virgin {
 		if ends[i] <= i {
 			return false
 		}
-		noise := readingNoise * math.Sqrt(2/float64(ends[i]-i)) / (l.x[ends[i]] - l.x[i])
+		noise := printedStep * math.Sqrt(2/float64(ends[i]-i)) / (l.x[ends[i]] - l.x[i])
 		return slopes[i] >= share*slopes[best]-math.Min(noise, 0.1*slopes[best])
 	}
 	v.steepest = slopes[best]
@@ -71,19 +73,39 @@ func (l *loading) virginLine(share float64) virgin {
 	for i := best - 1; i >= l.first && enough(i); i-- {
 		v.first = i
 	}
-	tail := best
 	for i := best + 1; i < len(l.x) && enough(i); i++ {
-		v.last, tail = ends[i], i
-	}
-	// S-shaped: what follows the virgin part is clearly flatter to the end.
-	for i := tail + 1; i < len(l.x); i++ {
-		if ends[i] > i && slopes[i] < sShapeShare*v.steepest {
-			v.sShaped = true
-		}
+		v.last = ends[i]
 	}
 	v.line, v.ok = fit(l.x, l.e, v.first, v.last)
-	v.ok = v.ok && v.line.slope < 0
+	if v.ok = v.ok && v.line.slope < 0; !v.ok {
+		return v
+	}
+	// S-shaped: the end of the curve is clearly flatter than its virgin part.
+	// Noise can only make the steepest stand out, so its share is taken off.
+	// Last points that reach back before the virgin part say nothing of it.
+	if line, first, ok := l.lastLine(); ok && first >= v.first {
+		noise := math.Hypot(l.slopeNoise(v.first, v.last), l.slopeNoise(first, len(l.x)-1)) / -v.line.slope
+		v.flattening = math.Max(0, math.Min(0.6, 1-line.slope/v.line.slope-flatteningNoise*noise))
+	}
+	v.sShaped = v.flattening > sShape
 	return v
+}
+
+// slopeNoise returns the standard deviation of a fitted slope from reading noise.
+func (l *loading) slopeNoise(first, last int) float64 {
+	var mean, squares float64
+	for i := first; i <= last; i++ {
+		mean += l.x[i]
+	}
+	mean /= float64(last - first + 1)
+	for i := first; i <= last; i++ {
+		squares += (l.x[i] - mean) * (l.x[i] - mean)
+	}
+	noise := readingNoise
+	if l.dense {
+		noise /= denseAveraging
+	}
+	return noise / math.Sqrt(squares)
 }
 
 // lastLine returns the line through the last points: three, or the last half
