@@ -2,6 +2,7 @@ package intake
 
 import (
 	"fmt"
+	"slices"
 	"strconv"
 	"strings"
 )
@@ -43,7 +44,13 @@ func (rd *reader) bind(g *grid, specs []spec) (fields []field, index map[string]
 	for _, s := range specs {
 		if _, ok := index[s.name]; s.required && !ok {
 			sound = false
-			rd.add(Problem{File: g.file, Line: max(header.line, 1), Name: s.name, Message: "no such column", Wanted: fmt.Sprintf("a column %q", s.title())})
+			message := "no such column"
+			for _, f := range fields {
+				if f.spec < 0 && f.header != "" && slices.Contains(nearSpecs(bare(f.header), specs), s.name) {
+					message += fmt.Sprintf("; %q of field %d is near it", f.header, f.place)
+				}
+			}
+			rd.add(Problem{File: g.file, Line: max(header.line, 1), Name: s.name, Message: message, Wanted: fmt.Sprintf("a column %q", s.title())})
 		}
 	}
 	return fields, index, sound
@@ -70,18 +77,22 @@ func (rd *reader) unknownColumn(g *grid, i int, f field, specs []spec) {
 		}
 		return
 	}
-	typed := f.header
-	if s := splits(f.header); len(s) > 0 && s[0].sure {
-		typed = s[0].name
-	}
 	message := fmt.Sprintf("column %q is not known and was not used", f.header)
 	if g.table == Results {
 		message = fmt.Sprintf("column %q is not known: its cells are kept as typed and not used", f.header)
 	}
-	if names := nearSpecs(typed, specs); len(names) > 0 {
+	if names := nearSpecs(bare(f.header), specs); len(names) > 0 {
 		message += "; near it: " + quoted(names)
 	}
 	rd.note(fmt.Sprintf("%s:%d:%d", g.file, g.header.lineOf(i), i+1), message)
+}
+
+// bare returns a header without the unit in brackets.
+func bare(header string) string {
+	if s := splits(header); len(s) > 0 && s[0].sure {
+		return s[0].name
+	}
+	return header
 }
 
 // nearSpecs returns the columns that a name may have meant.
@@ -214,8 +225,12 @@ func (rd *reader) checkWidths(g *grid, fields []field) []gridRow {
 	return kept
 }
 
-// decimalMark decides the decimal mark of a file from all its number cells.
-func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []gridRow) byte {
+// A place is a cell of a file: line and field.
+type place struct{ line, column int }
+
+// decimalMark decides the decimal mark of a file from all its number cells, and
+// returns the cells that have been reported because they contradict it.
+func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []gridRow) (byte, map[place]bool) {
 	var c census
 	for _, r := range rows {
 		for i, f := range fields {
@@ -244,12 +259,14 @@ func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []grid
 		// Number cells of a workbook have a point; a comma means text.
 		mark, wrong, note = '.', c.ask(c.grouped), ""
 	}
+	told := map[place]bool{}
 	for _, p := range wrong {
 		p.File = g.file
+		told[place{p.Line, p.Column}] = true
 		rd.add(p)
 	}
 	if note != "" {
 		rd.noteFile(g.file, note)
 	}
-	return mark
+	return mark, told
 }

@@ -174,7 +174,7 @@ func (rd *reader) parse(file string, table Table, text string) *grid {
 			return g
 		}
 		if err != nil {
-			rd.add(quoteProblem(file, err, offset))
+			rd.add(quoteProblem(file, text, comma, err, offset))
 			continue
 		}
 		if len(fields) > maxFields {
@@ -218,14 +218,28 @@ func (rd *reader) take(g *grid, row gridRow) bool {
 	return true
 }
 
+// nthLine returns a line of the text; 1 is the first.
+func nthLine(text string, n int) string {
+	for ; n > 1; n-- {
+		_, text, _ = strings.Cut(text, "\n")
+	}
+	line, _, _ := strings.Cut(text, "\n")
+	return line
+}
+
 // quoteProblem turns an error of the CSV reader into a problem.
-func quoteProblem(file string, err error, offset int) Problem {
+func quoteProblem(file, text string, comma rune, err error, offset int) Problem {
 	p := Problem{File: file, Name: "quotes", Message: err.Error(), Wanted: "a readable table"}
 	var parse *csv.ParseError
 	if !errors.As(err, &parse) {
 		return p
 	}
-	p.Line = parse.StartLine + offset
+	p.Line, p.Column = parse.StartLine+offset, 1
+	if parse.StartLine == parse.Line {
+		// The library counts bytes; we count fields.
+		line := nthLine(text, parse.Line)
+		p.Column += strings.Count(line[:min(max(parse.Column-1, 0), len(line))], string(comma))
+	}
 	switch {
 	case errors.Is(parse.Err, csv.ErrBareQuote):
 		p.Message, p.Wanted = "a quotation mark inside a cell that is not quoted", `the cell in quotes and the mark doubled: "5"" pipe"`

@@ -1,9 +1,6 @@
 package intake
 
 import (
-	"fmt"
-	"strings"
-
 	"github.com/gocarina/gocsv"
 
 	"pastload/profile"
@@ -126,7 +123,8 @@ func load[T any](rd *reader, g *grid, columns []column[T]) *table[T] {
 		rd.add(Problem{File: g.file, Name: string(g.table), Message: err.Error(), Wanted: "a readable table"})
 		return t
 	}
-	t.mark = rd.decimalMark(g, t.specs, t.fields, rows)
+	mark, told := rd.decimalMark(g, t.specs, t.fields, rows)
+	t.mark = mark
 	t.rows = make([]row[T], len(records))
 	cells := make([]profile.Cell, 0, len(records)*len(t.fields))
 	for i, rec := range records {
@@ -140,6 +138,9 @@ func load[T any](rd *reader, g *grid, columns []column[T]) *table[T] {
 				text = rec.Cells[j]
 			}
 			cells = append(cells, profile.Cell{File: g.file, Line: rows[i].lineOf(j), Column: j + 1, Text: text, Unit: f.unitText})
+			if told[place{cells[len(cells)-1].Line, j + 1}] {
+				continue
+			}
 			fill(rd, g, columns[f.spec], f, t.mark, &cells[len(cells)-1], &t.rows[i].Value)
 		}
 	}
@@ -188,97 +189,4 @@ func fill[T any](rd *reader, g *grid, c column[T], f field, mark byte, cell *pro
 	if base.Known {
 		*c.base(to) = base
 	}
-}
-
-// readNumber reads a number cell in the unit of its header. message tells what
-// is wrong with it.
-func readNumber(s spec, f field, mark byte, cell *profile.Cell) (n, base profile.Number, np bool, message string) {
-	shown := fmt.Sprintf("%q ", clean(cell.Text))
-	tok := scan(cell.Text)
-	if s.ranges && tok.kind == notANumber {
-		if top, end, ok := depthRange(cell.Text); ok {
-			a, okA := top.value(mark)
-			b, okB := end.value(mark)
-			if !okA || !okB {
-				return n, base, false, shown + "is not a range of numbers"
-			}
-			if b <= a {
-				return n, base, false, shown + "is a range whose end does not lie below its beginning"
-			}
-			return s.inside(a, f, cell), s.inside(b, f, cell), false, ""
-		}
-	}
-	switch {
-	case tok.kind == notMeasured:
-		return n, base, false, ""
-	case tok.kind == nonPlastic && s.plastic:
-		return n, base, true, ""
-	case tok.kind == nonPlastic:
-		return n, base, false, shown + "is not a number"
-	case tok.kind == notANumber:
-		return n, base, false, shown + tok.why
-	case tok.bound != profile.Exact && !s.bounds:
-		return n, base, false, shown + "is a bound, not a value"
-	case tok.percent && f.unit.name != "%":
-		return n, base, false, shown + "carries a percent sign in a column that is not in percent"
-	}
-	v, ok := tok.value(mark)
-	if !ok {
-		return n, base, false, shown + "is not a number"
-	}
-	n = s.inside(v, f, cell)
-	n.Bound, n.Assumed = tok.bound, tok.assumed
-	return n, base, false, ""
-}
-
-// inside converts a typed value to the unit inside.
-func (s spec) inside(v float64, f field, cell *profile.Cell) profile.Number {
-	return profile.Number{Value: convert(v, f.unit, s.unit), Known: true, Source: cell}
-}
-
-// wanted says what a cell of the column should hold.
-func (s spec) wanted(f field) string {
-	u := f.unit
-	if u.name == "" {
-		u = s.unit
-	}
-	switch {
-	case s.ranges:
-		return fmt.Sprintf("%s, e.g. %s or a range 4.00–4.45", u.words, u.example)
-	case s.dim == ratio && s.limit.set && s.limit.high > 0:
-		return "a number"
-	}
-	return fmt.Sprintf("%s, e.g. %s", u.words, u.example)
-}
-
-// outside tells why a value cannot be right as entered, and which other unit
-// would make it fit.
-func (s spec) outside(n profile.Number, f field) (message, wanted string) {
-	if !n.Known || s.limit.has(n.Value) {
-		return "", ""
-	}
-	u := s.unit.name
-	if u == "-" {
-		u = ""
-	}
-	amount := func(v float64) string { return strings.TrimSpace(number(v) + " " + u) }
-	message = fmt.Sprintf("%q", clean(n.Source.Text))
-	if f.unit.name != s.unit.name {
-		message += " " + f.unit.name + " is " + amount(n.Value) + " and"
-	}
-	typed := convert(n.Value, s.unit, f.unit)
-	message += fmt.Sprintf(" lies outside %s to %s", number(s.limit.low), amount(s.limit.high))
-	if s.limit.open && n.Value <= s.limit.low {
-		message = fmt.Sprintf("%q is not greater than %s", clean(n.Source.Text), number(s.limit.low))
-		return message, fmt.Sprintf("%s greater than %s, or blank where it was not measured", f.unit.words, number(s.limit.low))
-	}
-	for _, other := range s.dim.units {
-		if other.name == f.unit.name || n.Value <= 0 {
-			continue
-		}
-		if v := convert(typed, other, s.unit); s.limit.has(v) {
-			return message, fmt.Sprintf("%s, or the right unit in the header: %s %s would be %s", f.unit.words, number(typed), other.name, amount(v))
-		}
-	}
-	return message, s.wanted(f)
 }

@@ -12,7 +12,7 @@ import (
 type Problem struct {
 	File    string // as it was named to the program, without its folder
 	Line    int    // 0 where the problem is the file's as a whole
-	Column  int    // 1 is the first field; 0 where it is the row's as a whole
+	Column  int    // 1 is the first field, and stands for the row as a whole too
 	Name    string // the quantity, table or setting
 	Message string // what was found
 	Wanted  string // what is wanted instead
@@ -23,10 +23,7 @@ func (p Problem) String() string {
 	var b strings.Builder
 	b.WriteString(p.File)
 	if p.Line > 0 {
-		b.WriteString(":" + strconv.Itoa(p.Line))
-		if p.Column > 0 {
-			b.WriteString(":" + strconv.Itoa(p.Column))
-		}
+		b.WriteString(":" + strconv.Itoa(p.Line) + ":" + strconv.Itoa(max(p.Column, 1)))
 	}
 	if p.Name != "" {
 		b.WriteString(": " + p.Name)

@@ -48,10 +48,13 @@ func (t *table[T]) indexOf(name string) int {
 func openNumber[T any](t *table[T], r row[T], name string, s spec, unitText string, bare bool) (profile.Number, bool) {
 	cell := t.cell(r, name)
 	f := t.fields[t.index[name]]
+	report := func(message, wanted string) {
+		t.rd.add(Problem{File: cell.File, Line: cell.Line, Column: cell.Column, Name: s.name, Message: message, Wanted: wanted})
+	}
 	if unitText == "" {
 		unitText = f.unitText
 	} else if f.unitText != "" && unitKey(f.unitText) != unitKey(unitText) {
-		t.problem(r, name, fmt.Sprintf("unit %q in the row and %q in the header", unitText, f.unitText), "one unit")
+		report(fmt.Sprintf("unit %q in the row and %q in the header", unitText, f.unitText), "one unit")
 		return profile.Number{}, false
 	}
 	cell.Unit = unitText
@@ -61,10 +64,10 @@ func openNumber[T any](t *table[T], r row[T], name string, s spec, unitText stri
 	case unitText == "" && (bare || !s.dim.needsUnit()):
 		f.unit = s.unit
 	case unitText == "":
-		t.problem(r, name, "no unit for "+s.name, fmt.Sprintf("a unit of %s in the header or in a unit column: %s", s.dim.name, s.dim.list()))
+		report("no unit", fmt.Sprintf("a unit of %s in the header or in a unit column: %s", s.dim.name, s.dim.list()))
 		return profile.Number{}, false
 	default:
-		t.problem(r, name, fmt.Sprintf("%q is not a unit of %s", unitText, s.dim.name), "one of "+s.dim.list())
+		report(fmt.Sprintf("%q is not a unit of %s", unitText, s.dim.name), "one of "+s.dim.list())
 		return profile.Number{}, false
 	}
 	n, _, _, message := readNumber(s, f, t.mark, cell)
@@ -78,7 +81,7 @@ func openNumber[T any](t *table[T], r row[T], name string, s spec, unitText stri
 		}
 	}
 	if message != "" {
-		t.problem(r, name, strings.TrimSpace(message), wanted)
+		report(strings.TrimSpace(message), wanted)
 		return profile.Number{}, false
 	}
 	return n, true

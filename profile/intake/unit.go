@@ -56,7 +56,7 @@ var (
 		{"t/m2", "tonnes-force per square metre", "12.7", gravity, "tf/m2 tonne/m2 Mp/m2", ""},
 		{"atm", "standard atmospheres", "1.23", 101.325, "", ""},
 	}}
-	unitWeight = &dimension{"unit weight", []unit{
+	unitWeight = &dimension{"weight per volume", []unit{
 		{"kN/m3", "kilonewtons per cubic metre", "18.5", 1, "kNm-3", ""},
 		{"pcf", "pounds per cubic foot", "118", poundForce / (foot * foot * foot) / 1e3, "lb/ft3 lbf/ft3 lbs/ft3 lb/cuft", ""},
 		{"Mg/m3", "megagrams per cubic metre", "1.89", gravity, "Mgm-3", gravityNote},

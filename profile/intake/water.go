@@ -38,12 +38,12 @@ func (s *site) water(g *grid) {
 		s.rd.add(Problem{File: g.file, Line: g.header.line, Name: "pore pressure", Message: "no such column, and no head level", Wanted: `a column "pore pressure (kPa)" or "head level (m)"`})
 		return
 	}
-	type place struct {
+	type spot struct {
 		borehole   int
 		depth      float64
 		date, kind string
 	}
-	seen := map[place]row[waterRow]{}
+	seen := map[spot]row[waterRow]{}
 	for _, r := range t.rows {
 		i, ok := borehole(s, t, r, r.Value.Borehole)
 		if !ok || !r.Value.Depth.Known {
@@ -53,7 +53,7 @@ func (s *site) water(g *grid) {
 		if !s.pressure(t, r, &w, s.out.Boreholes[i]) {
 			continue
 		}
-		at := place{i, w.Depth.Value, w.Date, w.Kind}
+		at := spot{i, w.Depth.Value, w.Date, w.Kind}
 		if earlier, ok := seen[at]; ok {
 			t.problem(r, "depth", fmt.Sprintf("%s m of %s is observed already in line %d", metres(w.Depth), r.Value.Borehole, earlier.at.line), "one observation at a depth, or dates that tell them apart")
 			continue

@@ -1,10 +1,10 @@
 package intake
 
 import (
+	"bytes"
 	"errors"
 	"fmt"
-	"os"
-	"path/filepath"
+	"io/fs"
 	"strings"
 
 	"github.com/xuri/excelize/v2"
@@ -15,9 +15,8 @@ const maxUnzipped = 256 << 20 // bytes
 
 // openWorkbook reads the sheets that carry the names of tables. Values are
 // taken as stored, not as displayed: a display rounds.
-func (rd *reader) openWorkbook(path string, grids map[Table]*grid) {
-	name := filepath.Base(path)
-	data, ok := rd.bytes(path, "")
+func (rd *reader) openWorkbook(fsys fs.FS, name string, grids map[Table]*grid) {
+	data, ok := rd.bytes(fsys, name, "")
 	if !ok {
 		return
 	}
@@ -28,7 +27,7 @@ func (rd *reader) openWorkbook(path string, grids map[Table]*grid) {
 			rd.add(Problem{File: name, Message: "the workbook is damaged", Wanted: "a workbook that a spreadsheet program opens and saves as .xlsx"})
 		}
 	}()
-	f, err := excelize.OpenFile(path, excelize.Options{RawCellValue: true, UnzipSizeLimit: maxUnzipped, UnzipXMLSizeLimit: maxUnzipped})
+	f, err := excelize.OpenReader(bytes.NewReader(data), excelize.Options{RawCellValue: true, UnzipSizeLimit: maxUnzipped, UnzipXMLSizeLimit: maxUnzipped})
 	if err != nil {
 		rd.add(Problem{File: name, Message: workbookFault(err), Wanted: "a workbook without a password, saved as .xlsx"})
 		return
@@ -70,8 +69,6 @@ func workbookFault(err error) string {
 	switch {
 	case errors.Is(err, excelize.ErrWorkbookPassword), errors.Is(err, excelize.ErrUnsupportedEncryptMechanism):
 		return "the workbook is protected by a password"
-	case errors.Is(err, os.ErrPermission):
-		return "may not be read"
 	case strings.Contains(err.Error(), "unzip size"):
 		return fmt.Sprintf("the workbook unpacks to more than %d MB", maxUnzipped>>20)
 	}
@@ -113,7 +110,7 @@ func (rd *reader) readSheet(f *excelize.File, sheet, file string, t Table) *grid
 	}
 	rd.files[len(rd.files)-1].Rows = len(g.rows)
 	if g.header.fields == nil {
-		rd.add(Problem{File: file, Name: string(t), Message: "the sheet is empty", Wanted: "a header row: " + strings.TrimSpace(Template(string(t)))})
+		rd.add(Problem{File: file, Name: string(t), Message: "the sheet is empty", Wanted: "a header row with the columns " + requiredColumns(t)})
 		return nil
 	}
 	rd.uncalculated(f, sheet, g)
