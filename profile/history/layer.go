@@ -48,16 +48,9 @@ func (in *Input) layer(l int, k *constants, out *Result) {
 			add(t, in.NeighbourBetweenSD)
 		}
 	}
-	n := len(r.value)
-	if n > 0 {
-		r.fixed = mat.NewSymDense(n, nil)
-		for i := r.tests; i < n; i++ {
-			for j := i; j < n; j++ {
-				r.fixed.SetSym(i, j, in.NeighbourBetweenSD*in.NeighbourBetweenSD)
-			}
-		}
-	}
 
+	in.mend(l, &r, out)
+	in.addSources(l, k, &r)
 	var at []int
 	depth := append([]float64(nil), r.depth...)
 	effective := append([]float64(nil), r.effective...)
@@ -92,6 +85,42 @@ func (in *Input) layer(l int, k *constants, out *Result) {
 	out.Layers = append(out.Layers, in.explain(l, &r, post, ns))
 	if r.tests == 0 {
 		out.Notes = append(out.Notes, fmt.Sprintf("%s: no test of σ′p; the profile rests on what is usual", in.Layers[l].Name))
+	}
+}
+
+// addSources appends the rows of the indirect evidence, and sets the errors
+// that rows share.
+func (in *Input) addSources(l int, k *constants, r *rows) {
+	direct := len(r.value)
+	if sources := in.sourcesOf(l); len(sources) > 0 {
+		depths := readingDepths(sources)
+		for _, t := range k.Trusts {
+			if ind, ok := k.combineSources(sources, depths, t); ok {
+				r.indirect = append(r.indirect, ind)
+			}
+		}
+		for _, z := range depths {
+			s := 0.0
+			for _, x := range in.Readings {
+				if x.Layer == l && x.Depth == z {
+					s = x.EffectiveStress
+				}
+			}
+			r.depth = append(r.depth, z)
+			r.effective = append(r.effective, s)
+			r.value = append(r.value, 0)
+			r.sd = append(r.sd, 0)
+		}
+	}
+	n := len(r.value)
+	if n == 0 {
+		return
+	}
+	r.fixed = mat.NewSymDense(n, nil)
+	for i := r.tests; i < direct; i++ {
+		for j := i; j < direct; j++ {
+			r.fixed.SetSym(i, j, in.NeighbourBetweenSD*in.NeighbourBetweenSD)
+		}
 	}
 }
 
@@ -153,4 +182,26 @@ func (in *Input) explain(l int, r *rows, post *posterior, ns []node) LayerResult
 	}
 	sort.SliceStable(out.Mechanisms, func(i, j int) bool { return out.Mechanisms[i].Probability > out.Mechanisms[j].Probability })
 	return out
+}
+
+// mend puts a plausible effective stress in the place of one that is not, and
+// says so.
+func (in *Input) mend(l int, r *rows, out *Result) {
+	bad := implausible(r.depth, r.effective)
+	var z, e []float64
+	for j := range bad {
+		if !bad[j] {
+			z, e = append(z, r.depth[j]), append(e, r.effective[j])
+		}
+	}
+	for i := range bad {
+		if !bad[i] {
+			continue
+		}
+		given := r.effective[i]
+		r.effective[i] = math.Max(continued(z, e, r.depth[i]), 0)
+		out.Notes = append(out.Notes, fmt.Sprintf(
+			"%s, %.2f m: σ′v0 of %.0f kPa cannot stand beside that of the other tests (%.0f kPa on their line); the history there is inferred with the latter",
+			in.Layers[l].Name, r.depth[i], given, r.effective[i]))
+	}
 }

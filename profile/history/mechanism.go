@@ -12,6 +12,7 @@ const (
 	FormerLowerWater     = "former lower water level"
 	UnderDrainage        = "under-drainage"
 	StillConsolidating   = "still consolidating"
+	Irregular            = "cementation, leaching or mixed causes"
 )
 
 // ground is what a mechanism needs to know of the layer it acts in.
@@ -81,6 +82,11 @@ var mechanisms = []mechanism{
 		func(g *ground, p []float64, z, s float64) float64 {
 			x := math.Max(0, math.Min(1, (z-g.top)/(g.base-g.top)))
 			return math.Log(s) + math.Log(1-4*x*(1-x)*math.Min(0.8, math.Exp(p[0])))
+		}},
+	{Irregular, 0.10,
+		[]parameter{{"OCR at 100 kPa", "", 0.45, 0.6, 1, math.Exp}, {"exponent of σ′v0", "", 0.5, 0.35, 1, func(m float64) float64 { return m }}},
+		func(_ *ground, p []float64, _, s float64) float64 {
+			return math.Log(100) + p[0] + p[1]*math.Log(s/100)
 		}},
 }
 

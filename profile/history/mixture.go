@@ -14,24 +14,42 @@ type rows struct {
 	sd               []float64     // that the noise of the tests scales; 0 for indirect rows
 	fixed            *mat.SymDense // covariance of the errors that the noise does not scale
 	tests            int
+	indirect         []indirect // by trust; the last rows
 }
 
 // solved is the covariance of the rows under one setting.
 type solved struct {
 	setting
+	value     []float64 // of the rows; those of the sources depend on the trust
 	precision []float64 // n×n
 	logDet    float64
 }
 
 // solve inverts the covariance of the rows under a setting.
 func (r *rows) solve(c *constants, s setting) (solved, bool) {
-	n := len(r.value)
+	n := len(r.depth)
+	first := n
+	value := r.value
+	var ind *indirect
+	if len(r.indirect) > 0 {
+		ind = &r.indirect[s.trust]
+		first = n - len(ind.value)
+		value = append(append([]float64(nil), r.value[:first]...), ind.value...)
+		s.logPrior += ind.logNorm
+	}
 	sym := mat.NewSymDense(n, nil)
 	for i := range n {
 		for j := i; j < n; j++ {
 			v := s.amplitude * s.amplitude * c.correlation(r.depth[i]-r.depth[j], s.length)
 			if r.fixed != nil {
 				v += r.fixed.At(i, j)
+			}
+			if i >= first {
+				t := c.Trusts[s.trust].common
+				v += ind.cov.At(i-first, j-first)
+				v += t * t * c.smooth(r.depth[i]-r.depth[j], c.CommonLength)
+				b := c.CommonSlope
+				v += b * b * math.Log(math.Max(r.effective[i], 1)/100) * math.Log(math.Max(r.effective[j], 1)/100)
 			}
 			if i == j {
 				v += s.noise*s.noise*r.sd[i]*r.sd[i] + 1e-8
@@ -41,7 +59,7 @@ func (r *rows) solve(c *constants, s setting) (solved, bool) {
 	}
 	var chol mat.Cholesky
 	if n == 0 {
-		return solved{setting: s}, true
+		return solved{setting: s, value: value}, true
 	}
 	if !chol.Factorize(sym) {
 		return solved{}, false
@@ -56,7 +74,7 @@ func (r *rows) solve(c *constants, s setting) (solved, bool) {
 			p[i*n+j] = inverse.At(i, j)
 		}
 	}
-	return solved{setting: s, precision: p, logDet: chol.LogDet()}, true
+	return solved{setting: s, value: value, precision: p, logDet: chol.LogDet()}, true
 }
 
 // combination is one node under one setting, with what the rows say of it.
@@ -79,7 +97,7 @@ func (r *rows) combine(sv *solved, ln *line) combination {
 		residual: make([]float64, n), alpha: make([]float64, n),
 		u: make([]float64, n*p), pj: make([]float64, n*p), inner: make([]float64, p*p), step: make([]float64, p)}
 	for i := range n {
-		c.residual[i] = r.value[i] - ln.mean[i]
+		c.residual[i] = sv.value[i] - ln.mean[i]
 	}
 	for i := range n {
 		row := sv.precision[i*n : i*n+n]

@@ -24,7 +24,7 @@ type keptCombination struct {
 // posterior averages over all combinations.
 func (r *rows) posterior(k *constants, ns []node, lines []line) *posterior {
 	post := &posterior{rows: r, constants: k, nodes: ns}
-	for _, s := range k.settings() {
+	for _, s := range k.settings(max(1, len(r.indirect))) {
 		if sv, ok := r.solve(k, s); ok {
 			post.solved = append(post.solved, sv)
 		}
