@@ -6,15 +6,17 @@ import (
 	"github.com/spf13/cobra"
 
 	"pastload/profile"
+	"pastload/profile/design"
 	"pastload/render/report"
 	"pastload/render/sheet"
 )
 
 func newReportCommand() *cobra.Command {
 	var c common
+	var withoutDesign bool
 	cmd := &cobra.Command{
 		Use:   "report SITE... -o DIR",
-		Short: "Everything: report.html, drawings, and the tables as CSV",
+		Short: "Everything: report.html, drawings, and the tables as CSV and workbook",
 		Example: `  pastload report mysite -o out
   pastload report site1 site2 -o out     a subfolder for each site`,
 		Args: sites,
@@ -30,7 +32,7 @@ func newReportCommand() *cobra.Command {
 				return err
 			}
 			for i, dir := range siteFolders(c.output, paths) {
-				files, err := reportFiles(profiles[i], c.unitSystem())
+				files, err := reportFiles(profiles[i], c.unitSystem(), !withoutDesign)
 				if err != nil {
 					return err
 				}
@@ -43,22 +45,35 @@ func newReportCommand() *cobra.Command {
 		},
 	}
 	c.register(cmd)
+	cmd.Flags().BoolVar(&withoutDesign, "without-design", false, "keep to what was measured and derived: no cautious or adopted values, as for an investigation report")
 	return cmd
 }
 
 // reportFiles makes every file of a report in memory.
-func reportFiles(p *profile.Profile, u report.Units) ([]file, error) {
+func reportFiles(p *profile.Profile, u report.Units, withDesign bool) ([]file, error) {
 	figures, err := drawAll(p, sheet.A3)
 	if err != nil {
 		return nil, err
 	}
-	var page bytes.Buffer
-	if err := report.Compose(p, figures).WriteHTML(&page, u); err != nil {
+	values, err := design.Values(p)
+	if err != nil {
 		return nil, err
 	}
-	files := []file{{"report.html", page.Bytes()}}
+	if !withDesign {
+		values = design.WithoutDesign(values)
+	}
+	content := report.Content{Profile: p, Figures: figures, Values: values, Design: withDesign}
+	var page, book bytes.Buffer
+	if err := report.Compose(content).WriteHTML(&page, u); err != nil {
+		return nil, err
+	}
+	tables := report.Tables(content)
+	if err := report.WriteXLSX(&book, u, tables...); err != nil {
+		return nil, err
+	}
+	files := []file{{"report.html", page.Bytes()}, {"tables.xlsx", book.Bytes()}}
 	files = append(files, figureFiles("drawings/", figures)...)
-	for _, t := range report.Tables(p) {
+	for _, t := range tables {
 		var b bytes.Buffer
 		if err := t.WriteCSV(&b, u); err != nil {
 			return nil, err

@@ -89,6 +89,7 @@ names, or a single CSV of results with depth. Start with:
 		newReportCommand(),
 		newCorrelateCommand(),
 		newYieldCommand(),
+		newDesignCommand(),
 	)
 	for _, c := range append(root.Commands(), root) {
 		c.Args = usageArgs(c.Args)

@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"pastload/profile"
+	"pastload/profile/design"
 )
 
 // A Figures set is the drawings of a report.
@@ -14,11 +15,20 @@ type Figures struct {
 	Other  []Figure
 }
 
+// A Content is what a report is made of.
+type Content struct {
+	Profile *profile.Profile
+	Figures Figures
+	Values  []design.Stratum
+	Design  bool // cautious and adopted values go in; without it the report keeps to what was measured and derived
+}
+
 // Compose arranges a report on a site in the order in which its reader asks:
 // what is the finding, what does it rest on, where is the ground and its water,
 // how loaded today, how loaded in the past, which tests to doubt, what was
 // supposed, and who answers for it.
-func Compose(p *profile.Profile, figures Figures) *Document {
+func Compose(c Content) *Document {
+	p, figures := c.Profile, c.Figures
 	s := p.Site
 	t := s.Settings.Title
 	d := &Document{Title: orElse(t.Title, "Stress history of the ground"), Subtitle: subtitle(s), Running: running(t), Fields: fields(t)}
@@ -37,6 +47,7 @@ func Compose(p *profile.Profile, figures Figures) *Document {
 	}
 	d.add("tests", "Preconsolidation tests", testBlocks(p, figures.Curves)...)
 	d.add("compression", "Compressibility", Compression(p.Boreholes...))
+	d.add("values", "Values per stratum", valueBlocks(c.Values, c.Design)...)
 	d.add("results", "Results as read", Results(s))
 	d.add("assumptions", "Assumptions and limitations", limitations(p)...)
 	d.add("sources", "Tables read", sourceBlocks(s)...)

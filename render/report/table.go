@@ -95,11 +95,35 @@ func (c Column) Header(u Units) string {
 // numeric tells whether the column's cells are numbers.
 func (c Column) numeric() bool { return c.Dimension != Words }
 
-// A Cell is a number, a text, or nothing.
+// A Cell is a number, a text, or nothing. In a column whose rows are of different
+// quantities a number carries its own dimension and decimals.
 type Cell struct {
 	Text  string
 	Value float64
 	Known bool // Value is the content
+
+	own      bool // the cell has a dimension and decimals of its own
+	unit     bool // the content is the name of the unit of that dimension
+	as       Dimension
+	decimals int
+}
+
+// Q returns a number cell with a dimension and decimals of its own.
+func Q(v float64, d Dimension, decimals int) Cell {
+	c := N(v)
+	c.own, c.as, c.decimals = true, d, decimals
+	return c
+}
+
+// U returns a text cell that names the unit of a dimension.
+func U(d Dimension) Cell { return Cell{unit: true, as: d} }
+
+// in returns the dimension and decimals of a cell in a column.
+func (c Cell) in(col Column) (Dimension, int) {
+	if c.own {
+		return c.as, c.decimals
+	}
+	return col.Dimension, col.Decimals
 }
 
 // T returns a text cell.
@@ -128,11 +152,15 @@ func (t *Table) Add(cells ...Cell) { t.Rows = append(t.Rows, cells) }
 // Format writes a cell of a column in a unit system. Minus is the ASCII sign,
 // so that the text can be read back as a number.
 func (c Column) Format(cell Cell, u Units) string {
+	if cell.unit {
+		return u.of(cell.as).name
+	}
 	if !cell.Known {
 		return cell.Text
 	}
-	un := u.of(c.Dimension)
-	return fixed(cell.Value*un.factor, max(0, c.Decimals+un.decimals))
+	dimension, decimals := cell.in(c)
+	un := u.of(dimension)
+	return fixed(cell.Value*un.factor, max(0, decimals+un.decimals))
 }
 
 // fixed writes a number with decimals and no negative zero.

@@ -357,14 +357,19 @@ func Sources(s *profile.Site) *Table {
 	return t
 }
 
-// Tables returns every table of a site that has rows, in the order of the report.
-func Tables(p *profile.Profile) []*Table {
+// Tables returns every table of a report that has rows.
+func Tables(c Content) []*Table {
+	p := c.Profile
 	var out []*Table
-	for _, t := range []*Table{
+	all := []*Table{
 		Points(p.Boreholes...), Tests(p.Boreholes...), Zones(p.Boreholes...), Strata(p.Boreholes...),
 		Specimens(p.Specimens), Methods(p.Specimens), Grades(p.Specimens),
-		Compression(p.Boreholes...), Layers(p.Site), Water(p.Site), Results(p.Site), Assumptions(p.Boreholes...), Sources(p.Site),
-	} {
+		Compression(p.Boreholes...), Layers(p.Site), Water(p.Site), Results(p.Site), Assumptions(p.Boreholes...), Sources(p.Site), Design(c.Values), DesignWarnings(c.Values),
+	}
+	if c.Design {
+		all = append(all, Ways(c.Values), Line(p, c.Values))
+	}
+	for _, t := range all {
 		if len(t.Rows) > 0 {
 			out = append(out, t)
 		}

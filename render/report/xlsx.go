@@ -103,9 +103,15 @@ func styleColumn(f *excelize.File, name, column string, c Column, u Units) error
 
 func writeCell(f *excelize.File, name, at string, c Column, cell Cell, u Units) error {
 	switch {
+	case cell.unit:
+		return f.SetCellStr(name, at, c.Format(cell, u))
 	case cell.Known:
-		if err := f.SetCellFloat(name, at, cell.Value*u.of(c.Dimension).factor, -1, 64); err != nil {
+		dimension, _ := cell.in(c)
+		if err := f.SetCellFloat(name, at, cell.Value*u.of(dimension).factor, -1, 64); err != nil {
 			return err
+		}
+		if cell.own {
+			return nil // the column's format does not fit every row
 		}
 		column := strings.TrimRight(at, "0123456789")
 		style, err := f.GetColStyle(name, column)
