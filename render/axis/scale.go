@@ -56,10 +56,11 @@ type Log struct {
 // NewLog returns the scale with low at from and high at to, in mm. Ends that
 // have no logarithm are set to 0.1 and to ten times the lower.
 func NewLog(low, high, from, to float64) Log {
+	const closest = 1 + 1e-9 // ends whose logarithms can be told apart
 	if !isFinite(low) || low <= 0 {
 		low = 0.1
 	}
-	if !isFinite(high) || high <= low {
+	if !isFinite(high) || high <= low*closest {
 		high = low * 10
 	}
 	return Log{low, high, from, to}
@@ -70,7 +71,7 @@ func (s Log) At(v float64) float64 {
 	if !isFinite(v) || v <= 0 {
 		v = s.low
 	}
-	return s.from + math.Log(v/s.low)/math.Log(s.high/s.low)*(s.to-s.from)
+	return s.from + (math.Log(v)-math.Log(s.low))/(math.Log(s.high)-math.Log(s.low))*(s.to-s.from)
 }
 
 // Clamp implements Scale.
@@ -90,4 +91,5 @@ func clamp(s Scale, v float64) (float64, int) {
 	return s.At(v), 0
 }
 
-func isFinite(v float64) bool { return !math.IsNaN(v) && !math.IsInf(v, 0) }
+// isFinite reports whether v, and differences of such values, are numbers.
+func isFinite(v float64) bool { return math.Abs(v) <= 1e300 }

@@ -28,14 +28,15 @@ type Step struct {
 // Ticks implements Ticker. Values are whole multiples of the step, so that no
 // rounding builds up along the axis.
 func (s Step) Ticks(low, high float64) []Tick {
-	if !(s.Size > 0) || !isFinite(low) || !isFinite(high) || high < low {
+	if !(s.Size > 0) || !isFinite(s.Size) || !isFinite(low) || !isFinite(high) || high < low {
 		return nil
 	}
 	parts := max(s.Parts, 1)
 	small := s.Size / float64(parts)
 	const slack = 1e-9 // of a step, for ends that are multiples but for rounding
 	first, last := math.Ceil(low/small-slack), math.Floor(high/small+slack)
-	if last-first > mostTicks {
+	// Beyond 2^53 whole numbers are no longer told apart.
+	if !(last-first <= mostTicks) || math.Abs(first) > 1<<53 || math.Abs(last) > 1<<53 {
 		return nil
 	}
 	ticks := make([]Tick, 0, int(last-first)+1)

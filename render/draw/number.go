@@ -20,7 +20,19 @@ func round(v float64) float64 {
 
 // appendNumber appends v to two decimals, without trailing zeros.
 func appendNumber(b []byte, v float64) []byte {
-	return strconv.AppendFloat(b, round(v), 'f', -1, 64)
+	n := int64(math.Round(float64(v * 100)))
+	if n < 0 {
+		b, n = append(b, '-'), -n
+	}
+	b = strconv.AppendInt(b, n/100, 10)
+	if n %= 100; n == 0 {
+		return b
+	}
+	b = append(b, '.', byte('0'+n/10))
+	if n %= 10; n > 0 {
+		b = append(b, byte('0'+n))
+	}
+	return b
 }
 
 // format returns v to two decimals, without trailing zeros.

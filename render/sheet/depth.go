@@ -39,11 +39,17 @@ type DesignLine struct {
 
 // Depth writes the depth profile sheet of a borehole: ground and water, index
 // tests, unit weight, vertical stress with σ′p, OCR with the zones, and
-// compression index, all on one depth axis. The error is the writer's, or names
-// a value that could not be placed; then nothing is written.
+// compression index, all on one depth axis. The error is the writer's, or says
+// that the zone limits of the settings do not rise; then nothing is written.
 func Depth(w io.Writer, in DepthInput) error {
+	in = in.cleaned()
 	if in.Page.Width == 0 {
 		in.Page = A4
+	}
+	if l := in.Settings.Limits; !(l.NormallyConsolidated > 0 && l.NormallyConsolidated < l.LightlyOverconsolidated &&
+		l.LightlyOverconsolidated < l.HeavilyOverconsolidated && finite(l.HeavilyOverconsolidated)) {
+		return fmt.Errorf("depth sheet: zone limits %g, %g and %g; want three rising ratios greater than zero",
+			l.NormallyConsolidated, l.LightlyOverconsolidated, l.HeavilyOverconsolidated)
 	}
 	id := in.ID
 	if id == "" {
@@ -52,6 +58,7 @@ func Depth(w io.Writer, in DepthInput) error {
 	name := in.name()
 	d := &depthSheet{
 		in: in,
+		f:  in.Page.fonts(),
 		c: draw.New(draw.Sheet{
 			Width: in.Page.Width, Height: in.Page.Height, ID: id,
 			Title: "Stress history with depth, borehole " + name, Description: in.describe(),
@@ -137,10 +144,12 @@ type depthSheet struct {
 	step    axis.Step   // of the depth axis
 	scale   float64     // 1:scale
 	plot    draw.Box    // all panels
-	block   draw.Box    // the title block
-	caption draw.Box    // the room for notes
+	f       fonts
 	panels  []panel
 	unnamed int // strata that had no room for their name
+
+	caption    caption
+	captionBox draw.Box
 }
 
 // A panel is a column of the sheet.
@@ -158,6 +167,9 @@ func known(r profile.Range) bool {
 	return r.Known && finite(r.Low) && finite(r.Best) && finite(r.High)
 }
 
+// wide reports whether a range can be drawn as a bar or band.
+func wide(r profile.Range) bool { return known(r) && r.High > r.Low }
+
 // value returns a number that can be drawn.
 func value(n profile.Number) (float64, bool) { return n.Value, n.Known && finite(n.Value) }
 
@@ -167,9 +179,7 @@ func finite(v float64) bool { return !math.IsNaN(v) && !math.IsInf(v, 0) && math
 func (d *depthSheet) extent() (top, base float64) {
 	b, p := &d.in.Borehole, &d.in.Profile
 	see := func(v float64) {
-		if finite(v) && math.Abs(v) < 1e4 {
-			top, base = math.Min(top, v), math.Max(base, v)
-		}
+		top, base = math.Min(top, v), math.Max(base, v)
 	}
 	for _, s := range b.Strata {
 		see(s.Top)
@@ -185,9 +195,7 @@ func (d *depthSheet) extent() (top, base float64) {
 		see(p.Results[i].Depth)
 	}
 	for _, q := range b.Water {
-		if v, ok := value(q.Depth); ok {
-			see(v)
-		}
+		see(q.Depth.Value)
 	}
 	if v, ok := d.waterTable(); ok && v < 0 {
 		see(v)
@@ -214,8 +222,8 @@ func (d *depthSheet) groundLevel() (float64, bool) {
 
 // The heights above the panels, in mm.
 const (
-	headerHeight = 11.0
-	titleHeight  = 15.0
+	headerHeight = 10.0
+	titleHeight  = 13.0
 	limitHeight  = 4.0 // below the panels, for the limits of the zones
 )
 
@@ -223,11 +231,15 @@ const (
 func (d *depthSheet) layOut() {
 	page := d.in.Page
 	d.frame = page.frame()
-	d.block = draw.Box{Left: d.frame.Right - blockWidth, Top: d.frame.Bottom - blockHeight, Right: d.frame.Right, Bottom: d.frame.Bottom}
-	captionHeight := 31.0
-	bottom := d.block.Top - captionHeight
+	block := draw.Box{Left: d.frame.Right - blockWidth, Top: d.frame.Bottom - blockHeight, Right: d.frame.Right, Bottom: d.frame.Bottom}
+	d.captionBox = draw.Box{Left: d.frame.Left, Right: d.frame.Right, Bottom: block.Top - 1}
 	if page.wide {
-		bottom = d.block.Top - 2
+		d.captionBox.Right, d.captionBox.Bottom = block.Left-4, d.frame.Bottom
+	}
+	d.caption = newCaption(d.f.small, d.captionBox.Width(), d.key(), d.paragraphs(), 3)
+	bottom := d.captionBox.Bottom - d.caption.height()
+	if page.wide {
+		bottom = math.Min(bottom, block.Top-1)
 	}
 	plotTop := d.frame.Top + headerHeight + titleHeight
 	room := bottom - limitHeight - plotTop
@@ -247,10 +259,7 @@ func (d *depthSheet) layOut() {
 	height := (d.base - d.top) * perMetre
 	d.plot = draw.Box{Left: d.frame.Left, Top: plotTop, Right: d.frame.Right, Bottom: plotTop + height}
 	d.y = axis.NewLinear(d.top, d.base, d.plot.Top, d.plot.Bottom)
-	d.caption = draw.Box{Left: d.frame.Left, Top: d.plot.Bottom + limitHeight + 2, Right: d.frame.Right, Bottom: d.block.Top - 1}
-	if page.wide {
-		d.caption = draw.Box{Left: d.frame.Left, Top: d.block.Top, Right: d.block.Left - 3, Bottom: d.frame.Bottom}
-	}
+	d.captionBox.Top = d.plot.Bottom + limitHeight
 	d.choosePanels()
 	least, share := 0.0, 0.0
 	for _, p := range d.panels {
@@ -281,21 +290,21 @@ func (d *depthSheet) choosePanels() {
 		}
 	}
 	flags := len(d.in.Flags) > 0
-	strata := 28.0
+	strata := 27.0
 	if flags {
-		strata = 24
+		strata = 23
 	}
-	add(true, panel{title: draw.Text("Depth"), unit: draw.Text("(m)"), least: 9, share: 0.2, bare: true, draw: d.drawDepths})
+	add(true, panel{title: draw.Text("Depth"), unit: draw.Text("(m)"), least: 9.6, share: 0.2, bare: true, draw: d.drawDepths})
 	add(true, panel{title: draw.Text("Strata"), unit: draw.Text("and water"), least: strata, share: 2, draw: d.drawStrata})
 	add(index, panel{title: draw.Text("Index tests"), unit: draw.Text("PL, LL, w (%)"), least: 23, share: 1.6, draw: d.drawIndex})
 	add(weight, panel{title: draw.Text("γ"), unit: draw.Text("(kN/m³)"), least: 13, share: 1.1, draw: d.drawWeight})
-	add(true, panel{title: draw.Text("Vertical stress"), unit: draw.Text("(kPa)"), least: 35, share: 4, draw: d.drawStress})
+	add(true, panel{title: draw.Text("Vertical stress"), unit: draw.Text("(kPa)"), least: 35, share: 4.5, draw: d.drawStress})
 	add(true, panel{title: draw.Text("OCR = ").Join(sigmaP).Add(" / ").Join(sigmaV), unit: draw.Text("(log scale)"), least: 29, share: 2.4, draw: d.drawRatio})
-	add(len(d.in.Profile.Zones) > 0, panel{title: draw.Text("Zone"), unit: draw.Text("in words"), least: 24, share: 1.2, draw: d.drawZones})
+	add(len(d.in.Profile.Zones) > 0, panel{title: draw.Text("Zone"), unit: draw.Text("in words"), least: 25, share: 1.2, draw: d.drawZones})
 	add(compression, panel{title: draw.Text("C").Sub("c"), unit: draw.Text("(–)"), least: 14, share: 1.4, draw: d.drawCompression})
 	add(flags, panel{title: draw.Text("Flag"), least: 7, share: 0.3, draw: d.drawFlags})
 	_, level := d.groundLevel()
-	add(level, panel{title: draw.Text("Level"), unit: draw.Text("(m)"), least: 10, share: 0.2, bare: true, draw: d.drawLevels})
+	add(level, panel{title: draw.Text("Level"), unit: draw.Text("(m)"), least: 9.4, share: 0.2, bare: true, draw: d.drawLevels})
 }
 
 // measured reports which panels have data.

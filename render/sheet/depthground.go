@@ -13,9 +13,9 @@ func (d *depthSheet) header() {
 	b := &d.in.Borehole
 	x, y := d.frame.Left, d.frame.Top
 	what := draw.Text("Stress history with depth")
-	room := d.frame.Width() - body.Width(what) - 6
-	d.c.Text(x, y+4.5, draw.Text(title.Fit("Borehole "+d.in.name(), room)), title)
-	d.c.Text(d.frame.Right, y+4.5, what, anchored(bold(body), draw.End))
+	room := d.frame.Width() - d.f.body.Width(what) - 6
+	d.c.Text(x, y+4.6, draw.Text(d.f.title.Fit("Borehole "+d.in.name(), room)), d.f.title)
+	d.c.Text(d.frame.Right, y+4.6, what, anchored(bold(d.f.body), draw.End))
 	var parts []string
 	if v, ok := d.groundLevel(); ok {
 		s := "ground level " + metres(v) + " m"
@@ -43,8 +43,8 @@ func (d *depthSheet) header() {
 		line += p
 	}
 	scale := fmt.Sprintf("depth scale 1:%.0f at %s", d.scale, d.in.Page.Name)
-	d.c.Text(d.frame.Right, y+8.5, draw.Text(scale), anchored(small, draw.End))
-	d.c.Text(x, y+8.5, draw.Text(small.Fit(line, d.frame.Width()-small.Width(draw.Text(scale))-4)), small)
+	d.c.Text(d.frame.Right, y+8.5, draw.Text(scale), anchored(d.f.small, draw.End))
+	d.c.Text(x, y+8.5, draw.Text(d.f.small.Fit(line, d.frame.Width()-d.f.small.Width(draw.Text(scale))-4)), d.f.small)
 }
 
 // background draws what runs through all panels: the depth grid and the
@@ -63,11 +63,9 @@ func (d *depthSheet) background() {
 
 // boundaries draws the boundaries of the strata through a panel.
 func (d *depthSheet) boundaries(p *panel) {
-	for i, s := range d.in.Borehole.Strata {
-		if i > 0 && finite(s.Top) {
-			y := d.y.At(s.Top)
-			d.c.Line(p.box.Left, y, p.box.Right, y, draw.Pen{Colour: draw.Grey, Width: draw.Thin})
-		}
+	for _, top := range d.strataTops() {
+		y := d.y.At(top)
+		d.c.Line(p.box.Left, y, p.box.Right, y, draw.Pen{Colour: draw.Grey, Width: draw.Thin})
 	}
 }
 
@@ -80,8 +78,8 @@ func (d *depthSheet) edges() {
 			d.c.Rect(draw.Box{Left: p.box.Left, Top: top, Right: p.box.Right, Bottom: p.box.Top}, draw.Pen{Width: draw.Medium}, draw.Fill{})
 		}
 		x := (p.box.Left + p.box.Right) / 2
-		d.c.Text(x, top+3.5, p.title, anchored(heading, draw.Middle))
-		d.c.Text(x, top+7, p.unit, anchored(small, draw.Middle))
+		d.c.Text(x, top+3.5, p.title, anchored(d.f.heading, draw.Middle))
+		d.c.Text(x, top+6.9, p.unit, anchored(d.f.small, draw.Middle))
 	}
 	// Ground level: the heaviest horizontal.
 	left, right := d.panels[0].box.Right, d.plot.Right
@@ -101,7 +99,7 @@ func (d *depthSheet) drawDepths(p *panel) {
 			continue
 		}
 		d.c.Line(x-1.6, y, x, y, draw.Pen{Width: draw.Medium})
-		d.c.Text(x-2.1, y+body.Height()/2, draw.Text(t.Label), anchored(body, draw.End))
+		d.c.Text(x-2.1, y+d.f.body.Height()/2, draw.Text(t.Label), anchored(d.f.body, draw.End))
 	}
 	d.c.Line(x, d.plot.Top, x, d.plot.Bottom, draw.Pen{Width: draw.Medium})
 }
@@ -110,14 +108,19 @@ func (d *depthSheet) drawDepths(p *panel) {
 func (d *depthSheet) drawLevels(p *panel) {
 	ground, _ := d.groundLevel()
 	x := p.box.Left
-	for _, t := range d.step.Ticks(ground-d.base, ground-d.top) {
+	ticks := d.step.Ticks(ground-d.base, ground-d.top)
+	widest := 0.0
+	for _, t := range ticks {
+		widest = math.Max(widest, d.f.body.Width(draw.Text(t.Label)))
+	}
+	for _, t := range ticks {
 		y := d.y.At(ground - t.Value)
 		if t.Label == "" {
 			d.c.Line(x, y, x+0.9, y, draw.Pen{Width: draw.Hair})
 			continue
 		}
 		d.c.Line(x, y, x+1.6, y, draw.Pen{Width: draw.Medium})
-		d.c.Text(p.box.Right, y+body.Height()/2, draw.Text(t.Label), anchored(body, draw.End))
+		d.c.Text(x+2.1+widest, y+d.f.body.Height()/2, draw.Text(t.Label), anchored(d.f.body, draw.End))
 	}
 }
 
@@ -127,9 +130,6 @@ func (d *depthSheet) drawStrata(p *panel) {
 	log := draw.Box{Left: p.box.Left, Top: p.box.Top, Right: p.box.Left + column, Bottom: p.box.Bottom}
 	names := log.Right + 2.2
 	for _, s := range d.in.Borehole.Strata {
-		if !finite(s.Top) || !finite(s.Base) || s.Base <= s.Top {
-			continue
-		}
 		box := draw.Box{Left: log.Left, Top: d.y.At(s.Top), Right: log.Right, Bottom: d.y.At(s.Base)}
 		soil := s.Soil
 		if soil == "" {
@@ -139,49 +139,92 @@ func (d *depthSheet) drawStrata(p *panel) {
 		d.c.Hatch(box, first, second)
 		d.c.Rect(box, draw.Pen{Width: draw.Thin}, draw.Fill{})
 	}
-	d.boundaries(&panel{box: draw.Box{Left: log.Right, Right: p.box.Right}})
-	notes := d.strataNotes(p.box.Right-names-0.5, p.box.Height())
-	if v, ok := d.waterTable(); ok && v <= d.base {
-		y := d.y.At(v)
-		d.waterMark(log.Right-2.2, y)
-		notes = append(notes, note{top: y - 0.1, base: y + 0.1, font: coloured(small, draw.Blue), rank: math.Inf(1),
-			lines: []draw.Label{draw.Text("water " + metres(v) + " m")}})
-	}
-	placed, left := spread(notes, p.box.Top, p.box.Bottom)
+	width := p.box.Right - names - 0.5
+	extra := d.waterNote(log.Right-2.2, width)
+	placed, left := fullest(p.box, func(most int) []note { return append(d.strataNotes(width, most), extra...) })
 	d.unnamed = left
+	d.rules(placed, log.Right, p.box.Right, d.strataTops(), draw.Pen{Colour: draw.Grey, Width: draw.Thin})
 	drawNotes(d.c, placed, log.Right, names)
 }
 
-// strataNotes writes the names as fully as their height on paper allows: first
-// with their depths, then fewer lines.
-func (d *depthSheet) strataNotes(width, height float64) []note {
-	var notes []note
-	for _, most := range []int{5, 4, 3, 2, 1} {
-		notes = notes[:0]
-		for _, s := range d.in.Borehole.Strata {
-			if !finite(s.Top) || !finite(s.Base) || s.Base <= s.Top {
-				continue
-			}
-			n := note{top: d.y.At(s.Top), base: d.y.At(s.Base), font: small, rank: s.Base - s.Top}
-			name := s.Name
-			if name == "" {
-				name = s.Soil
-			}
-			lines := most
-			if most > 3 {
-				lines = 4
-			}
-			n.lines = stacked(small.Wrap(name, width, lines))
-			depths := draw.Text(metres(s.Top) + "–" + metres(s.Base) + " m")
-			if roomy := n.base - n.top - n.height() - small.Line(); roomy > 0 || most == 5 {
-				n.lines = append(n.lines, depths)
-			}
-			if len(n.lines) > 0 {
-				notes = append(notes, n)
-			}
+// waterNote draws the water mark and returns the label that belongs to it.
+func (d *depthSheet) waterNote(x, width float64) []note {
+	v, ok := d.waterTable()
+	if !ok || v > d.base {
+		return nil
+	}
+	y := d.y.At(v)
+	d.waterMark(x, y)
+	text := "water " + metres(v) + " m"
+	if v < 0 {
+		text = "water " + metres(-v) + " m above ground"
+	}
+	return []note{{top: y - 0.1, base: y + 0.1, font: coloured(d.f.small, draw.Blue), rank: math.Inf(1),
+		lines: stacked(d.f.small.Wrap(text, width, 2))}}
+}
+
+// fullest lays out notes as fully as the height of a box allows without moving
+// any far from where it belongs: at first with many lines each, then with fewer.
+func fullest(box draw.Box, with func(most int) []note) (placed []note, left int) {
+	const far = 14 // mm
+	for _, most := range []int{6, 4, 3, 2, 1} {
+		placed, left = spread(with(most), box.Top, box.Bottom)
+		moved := 0.0
+		for _, n := range placed {
+			moved = math.Max(moved, math.Max(n.top-n.y, n.y-n.base))
 		}
-		if total(notes)+small.Line()+1 <= height {
+		if left == 0 && moved < far {
 			break
+		}
+	}
+	return placed, left
+}
+
+// rules draws boundaries beside a column, but for those that a label stands on.
+func (d *depthSheet) rules(notes []note, from, to float64, depths []float64, pen draw.Pen) {
+	for _, depth := range depths {
+		y := d.y.At(depth)
+		free := true
+		for _, n := range notes {
+			free = free && (y < n.y-n.height()/2 || y > n.y+n.height()/2)
+		}
+		if free {
+			d.c.Line(from, y, to, y, pen)
+		}
+	}
+}
+
+// strataTops returns the depths of the boundaries between strata.
+func (d *depthSheet) strataTops() []float64 {
+	var tops []float64
+	for i, s := range d.in.Borehole.Strata {
+		if i > 0 {
+			tops = append(tops, s.Top)
+		}
+	}
+	return tops
+}
+
+// strataNotes writes the names of the strata in at most so many lines, with
+// their depths where there is room for them.
+func (d *depthSheet) strataNotes(width float64, most int) []note {
+	var notes []note
+	for _, s := range d.in.Borehole.Strata {
+		n := note{top: d.y.At(s.Top), base: d.y.At(s.Base), font: d.f.small, rank: s.Base - s.Top}
+		name := s.Name
+		if name == "" {
+			name = s.Soil
+		}
+		lines := most
+		if roomy := int((n.base - n.top) / d.f.small.Line()); roomy > lines {
+			lines = min(roomy, 6)
+		}
+		n.lines = stacked(d.f.small.Wrap(name, width, lines))
+		if most == 6 || n.base-n.top > n.height()+d.f.small.Line() {
+			n.lines = append(n.lines, draw.Text(metres(s.Top)+"–"+metres(s.Base)+" m"))
+		}
+		if len(n.lines) > 0 {
+			notes = append(notes, n)
 		}
 	}
 	return notes
@@ -201,23 +244,33 @@ func (d *depthSheet) drawFlags(p *panel) {
 	d.boundaries(p)
 	var notes []note
 	for _, f := range d.in.Flags {
-		if !finite(f.Depth) || f.Depth < d.top || f.Depth > d.base {
+		if f.Depth < d.top || f.Depth > d.base {
 			continue
 		}
 		y := d.y.At(f.Depth)
-		notes = append(notes, note{top: y - 0.1, base: y + 0.1, font: bold(small),
-			lines: []draw.Label{draw.Text(bold(small).Fit(f.Label, p.box.Width()-2))}})
+		notes = append(notes, note{top: y - 0.1, base: y + 0.1, font: bold(d.f.small),
+			lines: []draw.Label{draw.Text(bold(d.f.small).Fit(f.Label, p.box.Width()-2))}})
 	}
 	placed, _ := spread(notes, p.box.Top, p.box.Bottom)
 	drawNotes(d.c, placed, p.box.Left, p.box.Left+1.6)
 }
 
-// horizontal draws the axis of a panel at its top, with its grid, and returns
-// the ticks that carry labels.
-func (d *depthSheet) horizontal(p *panel, s axis.Scale, ticker axis.Ticker) {
+// steps returns tickers of a step and of coarser ones, to choose from.
+func steps(size float64) []axis.Ticker {
+	return []axis.Ticker{axis.Step{Size: size, Parts: 2}, axis.Step{Size: 2 * size, Parts: 2}, axis.Step{Size: 5 * size, Parts: 5}}
+}
+
+// horizontal draws the axis of a panel at its top, with its grid, by the first
+// of some tickers whose labels have room.
+func (d *depthSheet) horizontal(p *panel, s axis.Scale, tickers ...axis.Ticker) {
 	low, high := s.Ends()
-	ticks := ticker.Ticks(low, high)
-	edge := math.Inf(-1)
+	var ticks []axis.Tick
+	for _, t := range tickers {
+		ticks = t.Ticks(low, high)
+		if d.haveRoom(p, s, ticks) {
+			break
+		}
+	}
 	for _, t := range ticks {
 		x := s.At(t.Value)
 		if t.Label == "" {
@@ -228,14 +281,29 @@ func (d *depthSheet) horizontal(p *panel, s axis.Scale, ticker axis.Ticker) {
 		if x > p.box.Left+0.3 && x < p.box.Right-0.3 {
 			d.c.Line(x, p.box.Top, x, p.box.Bottom, draw.Pen{Colour: draw.Pale, Width: draw.Hair})
 		}
-		// Labels stay inside their panel, and are left out where they would touch.
-		l := draw.Text(t.Label)
-		half := small.Width(l) / 2
-		at := math.Max(p.box.Left+half+0.3, math.Min(p.box.Right-half-0.3, x))
-		if at-half < edge+0.6 {
+		d.c.Text(d.tickPlace(p, s, t), p.box.Top-2, draw.Text(t.Label), anchored(d.f.small, draw.Middle))
+	}
+}
+
+// tickPlace returns the middle of a tick's label, which stays inside its panel.
+func (d *depthSheet) tickPlace(p *panel, s axis.Scale, t axis.Tick) float64 {
+	half := d.f.small.Width(draw.Text(t.Label))/2 + 0.8
+	return math.Max(p.box.Left+half, math.Min(p.box.Right-half, s.At(t.Value)))
+}
+
+// haveRoom reports whether the labels of ticks stand clear of each other.
+func (d *depthSheet) haveRoom(p *panel, s axis.Scale, ticks []axis.Tick) bool {
+	edge := math.Inf(-1)
+	for _, t := range ticks {
+		if t.Label == "" {
 			continue
 		}
+		half := d.f.small.Width(draw.Text(t.Label)) / 2
+		at := d.tickPlace(p, s, t)
+		if at-half < edge+0.9 {
+			return false
+		}
 		edge = at + half
-		d.c.Text(at, p.box.Top-2, l, anchored(small, draw.Middle))
 	}
+	return true
 }

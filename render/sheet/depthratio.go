@@ -28,7 +28,7 @@ func limits(l profile.Limits) []struct {
 // ratioEnds returns the ends of the OCR axis: 0.5 to 10, and more where a best
 // value asks for it.
 func (d *depthSheet) ratioEnds() (float64, float64) {
-	low, high := 0.5, 10.0
+	low, high := 0.53, 9.5
 	see := func(v float64, ok bool) {
 		if ok && finite(v) && v > 0 {
 			low, high = math.Min(low, math.Max(v, 0.05)), math.Max(high, math.Min(v, 200))
@@ -41,7 +41,7 @@ func (d *depthSheet) ratioEnds() (float64, float64) {
 	for i := range d.in.Profile.Tests {
 		see(value(d.in.Profile.Tests[i].OCR))
 	}
-	return axis.RoundLog(low, high)
+	return axis.RoundLog(low*0.95, high*1.05)
 }
 
 // drawRatio draws OCR on a logarithmic axis over the tints of the zones.
@@ -58,7 +58,7 @@ func (d *depthSheet) drawRatio(p *panel) {
 		d.c.Rect(draw.Box{Left: from, Top: p.box.Top, Right: to, Bottom: p.box.Bottom}, draw.Pen{}, zoneTint(z.zone))
 	}
 	d.boundaries(p)
-	d.horizontal(p, s, axis.Decades{Named: []int{1, 2, 5}})
+	d.horizontal(p, s, axis.Decades{Named: []int{1, 2, 5}}, axis.Decades{Named: []int{1, 3}}, axis.Decades{Named: []int{1}})
 	d.c.Line(s.At(1), p.box.Top, s.At(1), p.box.Bottom, draw.Pen{Width: draw.Thick})
 	for i, z := range zones[1:] {
 		x, beyond := s.Clamp(z.from)
@@ -70,7 +70,7 @@ func (d *depthSheet) drawRatio(p *panel) {
 		if i == 0 {
 			anchor = draw.End
 		}
-		d.c.Text(x, p.box.Bottom+3.6, draw.Text(fmt.Sprintf("%g", z.from)), anchored(small, anchor))
+		d.c.Text(x, p.box.Bottom+3.6, draw.Text(fmt.Sprintf("%g", z.from)), anchored(d.f.small, anchor))
 	}
 	room := &placer{area: p.box.Inset(0.3)}
 	ocr := func(q *profile.Point) profile.Range {
@@ -80,7 +80,11 @@ func (d *depthSheet) drawRatio(p *panel) {
 		return q.OCR
 	}
 	d.band(ocr, s, bandEdge, bandFill)
-	d.course(func(q *profile.Point) (float64, bool) { r := ocr(q); return r.Best, known(r) }, s, historyLine.pen, room)
+	best := d.course(func(q *profile.Point) (float64, bool) { r := ocr(q); return r.Best, known(r) }, s, historyLine.pen, false, room)
+	if len(best) == 0 && len(d.in.Profile.Tests) == 0 {
+		f := anchored(d.f.small, draw.Middle)
+		d.c.Halo((p.box.Left+p.box.Right)/2, (p.box.Top+p.box.Bottom)/2, draw.Text("no ").Join(sigmaP).Add(" is known"), f)
+	}
 	d.undefined(p)
 	d.tests(room, s, func(t *profile.Test) (profile.Range, profile.Range, bool) {
 		e, ok1 := value(t.Effective)
@@ -96,61 +100,97 @@ func (d *depthSheet) drawRatio(p *panel) {
 	})
 }
 
-// undefined marks the depths where σ′v0 is not greater than zero, so that there
-// is no ratio to draw.
-func (d *depthSheet) undefined(p *panel) {
+// withoutStress returns the stretches of depth in which σ′v0 is not greater than
+// zero, so that there is no ratio to draw. The ground surface itself, where
+// σ′v0 is zero by nature, is none.
+func (d *depthSheet) withoutStress() [][2]float64 {
+	var out [][2]float64
 	points := d.in.Profile.Points
 	for i := 1; i < len(points); i++ {
+		from, to := points[i-1].Depth, points[i].Depth
 		a, ok1 := value(points[i-1].Effective)
 		b, ok2 := value(points[i].Effective)
-		if !ok1 || !ok2 || a > 0 && b > 0 || a > 0 && points[i-1].Depth == 0 || b > 0 && points[i-1].Depth <= 0 || points[i].Depth <= points[i-1].Depth {
+		if !ok1 || !ok2 || !(to > from) || a > 0 && b > 0 || a == 0 && b > 0 {
 			continue
 		}
-		// The first stretch below ground begins at zero by nature, and says nothing.
-		if a == 0 && b > 0 {
-			continue
+		// The stress is a straight line between two points.
+		if a > 0 {
+			from += (to - from) * a / (a - b)
+		} else if b > 0 {
+			to -= (to - from) * b / (b - a)
 		}
-		box := draw.Box{Left: p.box.Left, Top: d.y.At(points[i-1].Depth), Right: p.box.Right, Bottom: d.y.At(points[i].Depth)}
+		if n := len(out); n > 0 && out[n-1][1] >= from-1e-9 {
+			out[n-1][1] = to
+		} else {
+			out = append(out, [2]float64{from, to})
+		}
+	}
+	return out
+}
+
+// withoutRatio says in words where there is no ratio.
+func (d *depthSheet) withoutRatio() string {
+	s := ""
+	for _, r := range d.withoutStress() {
+		if s != "" {
+			s += ", "
+		}
+		s += metres(r[0]) + " to " + metres(r[1]) + " m"
+	}
+	if s == "" {
+		return ""
+	}
+	return "Hatched in the OCR panel: σ′v0 is zero or less (" + s + "), no OCR exists there; look at the water levels and unit weights."
+}
+
+// undefined hatches the depths without a ratio.
+func (d *depthSheet) undefined(p *panel) {
+	l := sigmaV.Add(" ≤ 0: no OCR")
+	f := anchored(d.f.small, draw.Middle)
+	for _, r := range d.withoutStress() {
+		box := draw.Box{Left: p.box.Left, Top: d.y.At(r[0]), Right: p.box.Right, Bottom: d.y.At(r[1])}
 		d.c.Hatch(box, draw.Rock, draw.Blank)
+		if box.Height() > 2*f.Line() {
+			d.c.Halo((box.Left+box.Right)/2, (box.Top+box.Bottom)/2+f.Height()/2, l, f)
+		}
 	}
 }
 
 // drawZones writes the zones in words beside their tint, with their probability.
 func (d *depthSheet) drawZones(p *panel) {
-	d.boundaries(p)
-	const bar = 2.2
+	const bar = 2.4
 	x := p.box.Left + bar
-	width := p.box.Right - x - 1.6
-	var notes []note
-	for _, most := range []int{8, 4, 2, 1} {
-		notes = notes[:0]
-		for _, z := range d.in.Profile.Zones {
-			if !finite(z.Top) || !finite(z.Base) || z.Base <= z.Top {
-				continue
-			}
-			n := note{top: d.y.At(z.Top), base: d.y.At(z.Base), font: small, rank: z.Base - z.Top}
-			n.lines = stacked(small.Wrap(zoneWords(z), width, most))
-			if v, ok := value(z.Probability); ok && most > 1 {
-				n.lines = append(n.lines, draw.Text("P = "+percent(v)))
-			}
-			if known(z.OCR) && n.base-n.top > n.height()+small.Line() {
-				n.lines = append(n.lines, draw.Text(rangeWords(z.OCR)[2:]))
-			}
-			notes = append(notes, n)
-		}
-		if total(notes) <= p.box.Height() {
-			break
-		}
-	}
+	width := p.box.Right - x - 1.5
+	var ends []float64
 	for _, z := range d.in.Profile.Zones {
-		if finite(z.Top) && finite(z.Base) && z.Base > z.Top {
-			box := draw.Box{Left: p.box.Left, Top: d.y.At(z.Top), Right: x, Bottom: d.y.At(z.Base)}
-			d.c.Rect(box, draw.Pen{Width: draw.Thin}, zoneTint(z.Zone))
-			d.c.Line(p.box.Left, box.Bottom, p.box.Right, box.Bottom, draw.Pen{Width: draw.Thick})
+		box := draw.Box{Left: p.box.Left, Top: d.y.At(z.Top), Right: x, Bottom: d.y.At(z.Base)}
+		d.c.Rect(box, draw.Pen{Width: draw.Thin}, zoneTint(z.Zone))
+		if z.Base < d.base-1e-9 {
+			ends = append(ends, z.Base)
 		}
 	}
-	placed, _ := spread(notes, p.box.Top, p.box.Bottom)
+	placed, _ := fullest(p.box, func(most int) []note { return d.zoneNotes(width, most) })
+	d.rules(placed, p.box.Left, p.box.Right, d.strataTops(), draw.Pen{Colour: draw.Grey, Width: draw.Thin})
+	d.rules(placed, p.box.Left, p.box.Right, ends, draw.Pen{Width: draw.Thick})
 	drawNotes(d.c, placed, x, x+1.2)
+}
+
+// zoneNotes writes the zones in at most so many lines, with probability and OCR
+// where there is room.
+func (d *depthSheet) zoneNotes(width float64, most int) []note {
+	var notes []note
+	for _, z := range d.in.Profile.Zones {
+		n := note{top: d.y.At(z.Top), base: d.y.At(z.Base), font: d.f.small, rank: z.Base - z.Top}
+		n.lines = stacked(n.font.Wrap(zoneWords(z), width, most))
+		if v, ok := value(z.Probability); ok && most > 1 {
+			n.lines = append(n.lines, draw.Text("P "+percent(v)))
+		}
+		if s := rangeWords(z.OCR); s != "" && n.base-n.top > n.height()+n.font.Line() {
+			n.lines = append(n.lines, draw.Text(s[2:]))
+		}
+		notes = append(notes, n)
+	}
+	return notes
 }
 
 // percent writes a probability without claiming certainty.
@@ -161,6 +201,6 @@ func percent(v float64) string {
 	case p < 1:
 		return "< 1 %"
 	default:
-		return fmt.Sprintf("%.0f %%", p)
+		return fmt.Sprintf("= %.0f %%", p)
 	}
 }

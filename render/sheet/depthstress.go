@@ -1,6 +1,7 @@
 package sheet
 
 import (
+	"fmt"
 	"math"
 
 	"pastload/profile"
@@ -12,49 +13,25 @@ import (
 // zero.
 func (d *depthSheet) drawStress(p *panel) {
 	d.boundaries(p)
-	low, high := 0.0, 10.0
-	see := func(v float64, ok bool) {
-		if ok && finite(v) {
-			low, high = math.Min(low, v), math.Max(high, v)
-		}
-	}
-	for i := range d.in.Profile.Points {
-		q := &d.in.Profile.Points[i]
-		see(value(q.Total))
-		see(value(q.Pore))
-		see(value(q.Effective))
-		see(q.Preconsolidation.Best, known(q.Preconsolidation))
-	}
-	for i := range d.in.Profile.Tests {
-		see(testValue(&d.in.Profile.Tests[i]))
-	}
-	for _, w := range d.in.Borehole.Water {
-		see(value(w.Pressure))
-	}
-	for _, l := range d.in.Design {
-		for _, v := range l.Stresses {
-			see(v, true)
-		}
-	}
+	low, high := d.stressEnds()
 	low, high, step := axis.Round(low, high*1.02, int(math.Max(3, p.box.Width()/10)))
 	s := axis.NewLinear(low, high, p.box.Left, p.box.Right)
-	d.horizontal(p, s, axis.Step{Size: step, Parts: 2})
+	d.horizontal(p, s, steps(step)...)
 	if low < 0 {
 		d.c.Line(s.At(0), p.box.Top, s.At(0), p.box.Bottom, draw.Pen{Width: draw.Medium})
 	}
 	room := &placer{area: p.box.Inset(0.3)}
 	history := func(q *profile.Point) profile.Range { return q.Preconsolidation }
 	d.band(history, s, bandEdge, bandFill)
-	total := d.course(func(q *profile.Point) (float64, bool) { return value(q.Total) }, s, totalLine.pen, room)
-	pore := d.course(func(q *profile.Point) (float64, bool) { return value(q.Pore) }, s, poreLine.pen, room)
-	effective := d.course(func(q *profile.Point) (float64, bool) { return value(q.Effective) }, s, effectiveLine.pen, room)
-	best := d.course(func(q *profile.Point) (float64, bool) { r := history(q); return r.Best, known(r) }, s, historyLine.pen, room)
+	total := d.course(func(q *profile.Point) (float64, bool) { return value(q.Total) }, s, totalLine.pen, false, room)
+	pore := d.course(func(q *profile.Point) (float64, bool) { return value(q.Pore) }, s, poreLine.pen, false, room)
+	effective := d.course(func(q *profile.Point) (float64, bool) { return value(q.Effective) }, s, effectiveLine.pen, false, room)
+	best := d.course(func(q *profile.Point) (float64, bool) { r := history(q); return r.Best, known(r) }, s, historyLine.pen, false, room)
 	for _, w := range d.in.Borehole.Water {
-		depth, ok1 := value(w.Depth)
-		pressure, ok2 := value(w.Pressure)
-		if ok1 && ok2 {
-			d.c.Marker(s.At(pressure), d.y.At(depth), draw.Marker{Shape: draw.TriangleDown, Colour: draw.Blue, Size: 1.6})
-			room.point(s.At(pressure), d.y.At(depth), 1)
+		if pressure, ok := value(w.Pressure); ok {
+			x, y := s.At(pressure), d.y.At(w.Depth.Value)
+			d.c.Marker(x, y, draw.Marker{Shape: draw.TriangleDown, Colour: draw.Blue, Size: 1.6})
+			room.point(x, y, 1)
 		}
 	}
 	d.drawDesign(s, room)
@@ -66,10 +43,96 @@ func (d *depthSheet) drawStress(p *panel) {
 		}
 		return r, t.Expected, ok
 	})
-	room.beside(d.c, total, sigmaT, body)
-	room.beside(d.c, effective, sigmaV, bold(body))
-	room.beside(d.c, pore, sigmaU, coloured(body, draw.Blue))
-	room.beside(d.c, best, sigmaP, coloured(bold(body), draw.Blue))
+	if dry(d.in.Profile.Points) {
+		room.beside(d.c, effective, sigmaV.Add(" = ").Join(sigmaT).Add(", ").Join(sigmaU).Add(" = 0"), bold(d.f.body))
+	} else {
+		room.beside(d.c, total, sigmaT, d.f.body)
+		room.beside(d.c, effective, sigmaV, bold(d.f.body))
+		room.beside(d.c, pore, sigmaU, coloured(d.f.body, draw.Blue))
+	}
+	d.beyondCourse(room, s)
+	room.beside(d.c, best, sigmaP, coloured(bold(d.f.body), draw.Blue))
+}
+
+// beyondCourse says how large σ′p is over the stretches in which its line is
+// beyond the axis.
+func (d *depthSheet) beyondCourse(room *placer, s axis.Scale) {
+	_, end := s.Ends()
+	points := d.in.Profile.Points
+	for i := 0; i < len(points); i++ {
+		first, low, high := i, math.Inf(1), math.Inf(-1)
+		for ; i < len(points) && known(points[i].Preconsolidation) && points[i].Preconsolidation.Best > end; i++ {
+			low, high = math.Min(low, points[i].Preconsolidation.Best), math.Max(high, points[i].Preconsolidation.Best)
+		}
+		if i == first {
+			continue
+		}
+		top, base := d.y.At(points[first].Depth), d.y.At(points[i-1].Depth)
+		if base-top < 2*d.f.small.Line() {
+			continue
+		}
+		text := " " + significant(low)
+		if significant(high) != significant(low) {
+			text += " to " + significant(high)
+		}
+		var at []draw.Point
+		var anchors []draw.Anchor
+		for _, part := range []float64{0.5, 0.35, 0.65, 0.2, 0.8} {
+			at = append(at, draw.Point{X: s.At(end) - 0.8, Y: top + part*(base-top)})
+			anchors = append(anchors, draw.End)
+		}
+		room.at(d.c, at, anchors, sigmaP.Add(text+" →"), coloured(d.f.small, draw.Blue))
+	}
+}
+
+// dry reports whether there is no pore pressure anywhere: then total and
+// effective stress are one line.
+func dry(points []profile.Point) bool {
+	for i := range points {
+		if v, ok := value(points[i].Pore); !ok || v != 0 {
+			return false
+		}
+	}
+	return true
+}
+
+// stressEnds returns the stresses that the axis must hold: those of today and
+// those adopted in full, and most of the past.
+func (d *depthSheet) stressEnds() (low, high float64) {
+	high = 10
+	see := func(v float64, ok bool) {
+		if ok && finite(v) {
+			low, high = math.Min(low, v), math.Max(high, v)
+		}
+	}
+	var past []float64
+	for i := range d.in.Profile.Points {
+		q := &d.in.Profile.Points[i]
+		see(value(q.Total))
+		see(value(q.Pore))
+		see(value(q.Effective))
+	}
+	for i := range d.in.Profile.Tests {
+		if v, ok := testValue(&d.in.Profile.Tests[i]); ok {
+			past = append(past, v)
+		}
+	}
+	if len(past) == 0 {
+		for i := range d.in.Profile.Points {
+			if r := d.in.Profile.Points[i].Preconsolidation; known(r) {
+				past = append(past, r.Best)
+			}
+		}
+	}
+	for _, w := range d.in.Borehole.Water {
+		see(value(w.Pressure))
+	}
+	for _, l := range d.in.Design {
+		for _, v := range l.Stresses {
+			see(v, true)
+		}
+	}
+	return low, capped(past, high)
 }
 
 // drawDesign draws the adopted lines, heaviest of all.
@@ -84,7 +147,7 @@ func (d *depthSheet) drawDesign(s axis.Scale, room *placer) {
 		}
 		d.c.Polyline(line, designLine.pen)
 		room.line(line)
-		room.beside(d.c, line, draw.Text(l.Label), coloured(bold(small), draw.Red))
+		room.beside(d.c, line, draw.Text(l.Label), coloured(bold(d.f.small), draw.Red))
 	}
 }
 
@@ -103,53 +166,88 @@ func testValue(t *profile.Test) (float64, bool) {
 	return 0, false
 }
 
+// leftOut reports whether a test has no part in the profile.
+func leftOut(t *profile.Test) bool { return t.LeftOut || !t.Used }
+
 // tests draws the tests of a panel: range, point in the shape of its grade, what
 // the rest of the ground expects there, and what is the matter with it.
 func (d *depthSheet) tests(room *placer, s axis.Scale, of func(*profile.Test) (test, expected profile.Range, ok bool)) {
+	low, high := s.Ends()
 	for i := range d.in.Profile.Tests {
 		t := &d.in.Profile.Tests[i]
-		_, e, ok := of(t)
-		if ok && known(e) && e.Best > 0 && finite(t.Depth) {
-			x, _ := s.Clamp(e.Best)
-			d.c.Line(x, d.y.At(t.Depth)-1.1, x, d.y.At(t.Depth)+1.1, draw.Pen{Colour: draw.Grey, Width: draw.Thick})
+		if _, e, ok := of(t); ok && known(e) && e.Best >= low && e.Best <= high {
+			x, y := s.At(e.Best), d.y.At(t.Depth)
+			d.c.Line(x, y-1.1, x, y+1.1, draw.Pen{Colour: draw.Grey, Width: draw.Thick})
 		}
 	}
 	type tag struct {
 		x, y float64
-		text string
+		l    string
+		font draw.Font
 	}
 	var tags []tag
 	for i := range d.in.Profile.Tests {
 		t := &d.in.Profile.Tests[i]
 		r, _, ok := of(t)
-		if !ok || !finite(t.Depth) {
+		if !ok {
 			continue
 		}
-		x, beyond := s.Clamp(r.Best)
+		x, way := s.Clamp(r.Best)
 		y := d.y.At(t.Depth)
-		if r.High > r.Low {
-			d.bar(s, r, y)
+		if way > 0 {
+			d.beyond(room, s.At(high), y, d.mark(t), draw.Text(boundSign(t)+significant(r.Best)))
+			x -= beyondRoom
+		} else {
+			if wide(r) {
+				d.bar(s, r, y)
+			}
+			d.c.Marker(x, y, d.mark(t))
+			room.point(x, y, 1.2)
 		}
-		m := d.mark(t)
-		if beyond != 0 {
-			m.Shape = map[int]draw.Shape{1: draw.ArrowRight, -1: draw.ArrowLeft}[beyond]
-		}
-		d.c.Marker(x, y, m)
-		if !t.Used {
+		g := tag{x, y, t.Specimen, bold(d.f.small)}
+		if leftOut(t) {
 			d.c.Marker(x, y, draw.Marker{Shape: draw.Cross, Size: 3.2})
 		}
-		room.point(x, y, 1.2)
-		if t.Verdict == profile.Conflicts {
+		switch {
+		case t.Verdict == profile.Conflicts:
 			d.c.Circle(x, y, 2.1, draw.Pen{Colour: draw.Red, Width: draw.Thick}, draw.Fill{})
 			room.point(x, y, 2.2)
-			tags = append(tags, tag{x, y, t.Specimen})
+			g.font.Colour = draw.Red
+		case t.Verdict == profile.Doubtful:
+			g.l += "?"
+			g.font.Colour = draw.Red
+		case !leftOut(t):
+			continue
+		}
+		if g.l != "" {
+			tags = append(tags, g)
 		}
 	}
 	for _, g := range tags {
-		if g.text != "" {
-			room.around(d.c, g.x, g.y, 2.7, draw.Text(small.Fit(g.text, 14)), coloured(bold(small), draw.Red))
-		}
+		room.around(d.c, g.x, g.y, 2.7, draw.Text(d.f.small.Fit(g.l, 14)), g.font)
 	}
+}
+
+// significant writes a stress or ratio with as many figures as it is worth.
+func significant(v float64) string {
+	if math.Abs(v) < 10 {
+		return ratio(v)
+	}
+	if math.Abs(v) >= 1000 {
+		v = math.Round(v/10) * 10
+	}
+	return fmt.Sprintf("%.0f", v)
+}
+
+// boundSign is what stands before a value that is only a bound.
+func boundSign(t *profile.Test) string {
+	switch t.Bound {
+	case profile.AtLeast:
+		return "≥ "
+	case profile.AtMost:
+		return "≤ "
+	}
+	return ""
 }
 
 // mark returns the marker of a test: its grade's shape, hollow where it is left
@@ -157,13 +255,13 @@ func (d *depthSheet) tests(room *placer, s axis.Scale, of func(*profile.Test) (t
 func (d *depthSheet) mark(t *profile.Test) draw.Marker {
 	m := gradeSeries(t.Grade).marker
 	m.Size = 2
-	if t.Bound == profile.AtLeast {
+	switch t.Bound {
+	case profile.AtLeast:
 		return draw.Marker{Shape: draw.ArrowRight, Size: 2}
-	}
-	if t.Bound == profile.AtMost {
+	case profile.AtMost:
 		return draw.Marker{Shape: draw.ArrowLeft, Size: 2}
 	}
-	if !t.Used {
+	if leftOut(t) {
 		m.Solid = false
 	}
 	return m

@@ -48,6 +48,7 @@ func (g ground) borehole() profile.Borehole {
 }
 
 func (g ground) profile() profile.BoreholeProfile {
+	const inside = 1e-6 // keeps a boundary on its own side
 	p := profile.BoreholeProfile{Borehole: g.name, GroundLevel: profile.Known(g.level), WaterTable: profile.Known(g.water)}
 	for _, s := range g.strata {
 		n := int(math.Ceil((s.Base - s.Top) / 0.5))
@@ -59,7 +60,8 @@ func (g ground) profile() profile.BoreholeProfile {
 				Total: profile.Known(total), Pore: profile.Known(pore), Effective: profile.Known(effective),
 			}
 			if effective > 0 {
-				q.OCR = profile.Around(g.ratio(depth)/g.spread, g.ratio(depth), g.ratio(depth)*g.spread)
+				ocr := g.ratio(math.Min(math.Max(depth, s.Top+inside), s.Base-inside))
+				q.OCR = profile.Around(ocr/g.spread, ocr, ocr*g.spread)
 				q.Preconsolidation = q.OCR.Scale(effective)
 			}
 			p.Points = append(p.Points, q)
@@ -134,6 +136,7 @@ func estuary() DepthInput {
 		in.Profile.Tests = append(in.Profile.Tests, g.test(fmt.Sprintf("S%d", len(in.Profile.Tests)+1), t.depth, t.factor, t.grade))
 	}
 	in.Profile.Tests[5].Used = false
+	in.Profile.Tests[7].Verdict = profile.Doubtful
 	last := &in.Profile.Tests[10]
 	last.Bound, last.Grade, last.Preconsolidation = profile.AtLeast, "bound only", profile.Single(500)
 	for _, r := range [][6]float64{
@@ -148,6 +151,8 @@ func estuary() DepthInput {
 	in.Borehole.Results[1].PlasticLimit = profile.Number{}
 	in.Borehole.Results = append(in.Borehole.Results, profile.Result{Depth: profile.Known(9.6), WaterContent: profile.Known(180)})
 	in.Borehole.Water = []profile.PorePressure{{Depth: profile.Known(6), Pressure: profile.Known(47)}, {Depth: profile.Known(13), Pressure: profile.Known(121)}}
+	in.Profile.Strata = []profile.StratumProfile{{Stratum: "Soft estuarine clay", Top: 2.4, Base: 9.1, Sentence: "dried crust over a lightly aged clay (74 %); about 0.9 m (0.3 to 1.6 m) of former drawdown would explain it."}}
+	in.Profile.Assumptions = []profile.Assumption{{Top: 0, Base: 0.6, Message: "unit weight taken as 18.5 kN/m³, from the densities measured in the stratum"}}
 	in.Profile.Zones = []profile.ZoneInterval{
 		{Top: 0, Base: 1.25, Zone: profile.HeavilyOverconsolidated, Probability: profile.Known(0.86), OCR: profile.Around(3.1, 4.9, 7)},
 		{Top: 1.25, Base: 6.6, Zone: profile.LightlyOverconsolidated, Probability: profile.Known(0.9), OCR: profile.Around(1.1, 1.6, 3.8)},

@@ -36,14 +36,25 @@ func (p Page) frame() draw.Box {
 	return draw.Box{Left: p.Left, Top: p.Top, Right: p.Width - p.Right, Bottom: p.Height - p.Bottom}
 }
 
-// The fonts of a sheet. None is smaller than 7 points.
-var (
-	small   = draw.Font{Size: 7}
-	faint   = draw.Font{Size: 7, Colour: "#444444"}
-	body    = draw.Font{Size: 8}
-	heading = draw.Font{Size: 8, Bold: true}
-	title   = draw.Font{Size: 12, Bold: true}
-)
+// fonts are the sizes of text on a page. None is smaller than 7 points.
+type fonts struct {
+	small, body, heading, title draw.Font
+}
+
+// fonts returns larger text for the larger page, which is often looked at from
+// further away or printed reduced.
+func (p Page) fonts() fonts {
+	scale := 1.0
+	if p.wide {
+		scale = 8.0 / 7
+	}
+	return fonts{
+		small:   draw.Font{Size: 7 * scale},
+		body:    draw.Font{Size: 8 * scale},
+		heading: draw.Font{Size: 8 * scale, Bold: true},
+		title:   draw.Font{Size: 12 * scale, Bold: true},
+	}
+}
 
 func anchored(f draw.Font, a draw.Anchor) draw.Font {
 	f.Anchor = a
@@ -69,9 +80,9 @@ type Figure struct {
 	Paper     string
 }
 
-// The rows of the title block are 7 mm: a small name over a value.
+// A row of the title block is a small name over a value.
 const (
-	blockRow    = 7.0
+	blockRow    = 6.5
 	blockRows   = 4
 	blockHeight = blockRow * blockRows
 	blockWidth  = 184.0
@@ -103,13 +114,14 @@ func titleBlock(c *draw.Canvas, frame draw.Box, t profile.TitleBlock, f Figure) 
 		{{"Prepared", t.PreparedBy, 28}, {"Checked", t.CheckedBy, 28}, {"Approved", t.ApprovedBy, 28}, {"Date", t.Date, 24}, {"Status", t.Status, 32}, {"Revision", t.Revision, 22}, {"Scale", f.Scale, 22}},
 	}
 	pen := draw.Pen{Width: draw.Medium}
+	label, entry := draw.Font{Size: 7, Colour: "#444444"}, draw.Font{Size: 8, Bold: true}
 	y := box.Top
 	for _, row := range rows {
 		x := box.Left
 		for _, cell := range row {
 			c.Rect(draw.Box{Left: x, Top: y, Right: x + cell.width, Bottom: y + blockRow}, pen, draw.Fill{})
-			c.Text(x+0.8, y+2.7, draw.Text(cell.name), faint)
-			c.Text(x+0.8, y+6, draw.Text(heading.Fit(cell.value, cell.width-1.6)), heading)
+			c.Text(x+0.8, y+2.6, draw.Text(cell.name), label)
+			c.Text(x+0.8, y+5.7, draw.Text(entry.Fit(cell.value, cell.width-1.6)), entry)
 			x += cell.width
 		}
 		y += blockRow
@@ -126,7 +138,12 @@ func joined(a, b string) string {
 }
 
 // metres writes a depth or level to the centimetre, as logs do.
-func metres(v float64) string { return minus(fmt.Sprintf("%.2f", v)) }
+func metres(v float64) string {
+	if !finite(v) {
+		return "?"
+	}
+	return minus(fmt.Sprintf("%.2f", v))
+}
 
 // minus gives figures the sign that belongs to them, and zero none.
 func minus(s string) string {

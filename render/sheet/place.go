@@ -35,7 +35,9 @@ func (p *placer) cost(b draw.Box) float64 {
 	inside := b.Overlap(p.area)
 	cost := 50 * (b.Width()*b.Height() - inside)
 	for _, t := range p.taken {
-		cost += b.Overlap(t)
+		if t.Left < b.Right && t.Right > b.Left && t.Top < b.Bottom && t.Bottom > b.Top {
+			cost += b.Overlap(t)
+		}
 	}
 	return cost
 }

@@ -13,12 +13,15 @@ type series struct {
 	pen    draw.Pen
 }
 
+// ungraded is the grade of a test that nobody graded.
+const ungraded = "not graded"
+
 // The series of tests by grade. Shape and fill tell them apart without colour.
 var grades = []series{
 	{name: "A", point: true, marker: draw.Marker{Shape: draw.Circle, Solid: true}},
 	{name: "B", point: true, marker: draw.Marker{Shape: draw.Square, Solid: true}},
 	{name: "C", point: true, marker: draw.Marker{Shape: draw.Triangle}},
-	{name: "not graded", point: true, marker: draw.Marker{Shape: draw.Diamond}},
+	{name: ungraded, point: true, marker: draw.Marker{Shape: draw.Diamond}},
 }
 
 // gradeSeries returns how a test of a grade is drawn.
