@@ -56,8 +56,11 @@ type Log struct {
 // NewLog returns the scale with low at from and high at to, in mm. Ends that
 // have no logarithm are set to 0.1 and to ten times the lower.
 func NewLog(low, high, from, to float64) Log {
-	const closest = 1 + 1e-9 // ends whose logarithms can be told apart
-	if !isFinite(low) || low <= 0 {
+	const (
+		closest = 1 + 1e-9 // ends whose logarithms can be told apart
+		least   = 1e-300   // below, numbers lose their digits
+	)
+	if !isFinite(low) || low < least {
 		low = 0.1
 	}
 	if !isFinite(high) || high <= low*closest {
