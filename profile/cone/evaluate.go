@@ -1,0 +1,347 @@
+package cone
+
+import (
+	"fmt"
+	"math"
+)
+
+// A Point is one depth of a sounding, evaluated.
+type Point struct {
+	Depth    float64 // m
+	Readings int     // averaged into it
+	Stratum  int     // index into Options.Strata, or −1
+	State
+	Corrected float64 // qt, kPa
+	Net       float64 // qt − σv0, kPa, greater than zero
+	Q         float64 // (qt − σv0)/σ′v0
+
+	Excess            Measure // u2 − u0, kPa
+	EffectiveCone     Measure // qt − u2, kPa
+	PorePressureRatio Measure // Bq
+	FrictionRatio     Measure // F, percent
+	BehaviourIndex    Measure // Ic
+	Clay              bool    // used for σ′p
+}
+
+// A Sounding is what a cone penetration test says.
+type Sounding struct {
+	Points []Point // by depth
+	Layers []Layer // by depth: the evidence for σ′p
+	Notes  []string
+}
+
+// Evaluate evaluates a sounding. It is NewReducer, Add and Result in one.
+func Evaluate(readings []Reading, stress Stress, o Options) (Sounding, error) {
+	r := NewReducer(o)
+	for _, x := range readings {
+		r.Add(x)
+	}
+	return r.Result(stress)
+}
+
+// Result evaluates what was added, for the stresses in the ground. The Reducer
+// is unchanged, and can take more readings.
+//
+// The notes say, in plain words, what was left out, averaged, assumed or looks
+// wrong. The error wraps ErrNoReadings where nothing can be used, or ErrUnit
+// where the size of the readings fits no unit of resistance or several; the notes
+// are returned with it.
+func (r *Reducer) Result(stress Stress) (Sounding, error) {
+	e := evaluation{Options: r.options, stress: stress, notes: r.count.notes(r.options)}
+	e.gather(r.cells)
+	if len(e.raw) == 0 {
+		return Sounding{Notes: e.notes}, fmt.Errorf("%w: none of %d has a depth, a resistance and a known stress", ErrNoReadings, r.count.read)
+	}
+	if err := e.units(); err != nil {
+		return Sounding{Notes: e.notes}, err
+	}
+	e.areaRatio()
+	e.poreOffset()
+	points := e.evaluate()
+	if len(points) == 0 {
+		return Sounding{Notes: e.notes}, fmt.Errorf("%w: the net resistance is nowhere greater than zero", ErrNoReadings)
+	}
+	e.mixedSigns(points)
+	layers := e.condense(points)
+	return Sounding{Points: points, Layers: layers, Notes: e.notes}, nil
+}
+
+// evaluation is one pass from cells to points.
+type evaluation struct {
+	Options
+	stress Stress
+	notes  []string
+	raw    []raw
+	area   Measure
+}
+
+// raw is a cell as it was read, beside the stress there.
+type raw struct {
+	depth          float64
+	n              int
+	qc, qt, fs, u2 Measure // MPa, MPa, kPa, kPa
+	state          State
+}
+
+func (e *evaluation) say(format string, args ...any) {
+	e.notes = append(e.notes, fmt.Sprintf(format, args...))
+}
+
+// gather lists the cells that have readings and a stress, by depth.
+func (e *evaluation) gather(cells []cell) {
+	noStress := 0
+	for i := range cells {
+		c := &cells[i]
+		if c.n == 0 {
+			continue
+		}
+		depth := c.depth / float64(c.n)
+		state, ok := e.stress(depth)
+		if !ok || !finite(state.Total) || !finite(state.Pore) || !finite(state.Effective) || state.Effective <= 0 {
+			noStress += int(c.n)
+			continue
+		}
+		x := raw{depth: depth, n: int(c.n), state: state,
+			qc: mean(c.qc, c.qcN), qt: mean(c.qt, c.qtN), fs: mean(c.fs, c.fsN), u2: mean(c.u2, c.u2N)}
+		e.raw = append(e.raw, x)
+	}
+	if noStress > 0 {
+		e.say("%d readings left out: no effective stress greater than zero is known there", noStress)
+	}
+	if e.PoreShift != 0 {
+		e.say("%g kPa was added to every u2, as asked", e.PoreShift)
+	}
+}
+
+// resistance is the corrected one where it was given.
+func (x *raw) resistance() float64 {
+	if x.qt.Known {
+		return x.qt.Value
+	}
+	return x.qc.Value
+}
+
+// units finds readings in another unit than they are said to be, and converts
+// them where only one unit makes sense.
+func (e *evaluation) units() error {
+	var s sizes
+	var u2, u0 []float64
+	for i := range e.raw {
+		if x := &e.raw[i]; x.u2.Known {
+			u2, u0 = append(u2, x.u2.Value), append(u0, x.state.Pore)
+		}
+	}
+	wet, note := poreUnit(u2, u0)
+	if note != "" {
+		e.say("%s", note)
+	}
+	// Air and predrilled holes at the ends say nothing of the unit.
+	from, to := e.inGround()
+	for i := range e.raw {
+		x := &e.raw[i]
+		x.u2.Value = x.u2.Value*wet + e.PoreShift
+		if i < from || i >= to {
+			continue
+		}
+		q := x.resistance()
+		s.resistance, s.total = append(s.resistance, q), append(s.total, x.state.Total)
+		if x.fs.Known && x.fs.Value > 0 && q > 0 {
+			s.friction = append(s.friction, x.fs.Value/q)
+		}
+		if x.u2.Known {
+			s.pore, s.poreOver = append(s.pore, x.u2.Value), append(s.poreOver, q)
+		}
+	}
+	factor, note, err := s.resistanceUnit()
+	if err != nil {
+		return err
+	}
+	if note != "" {
+		e.say("%s", note)
+	}
+	for i := range e.raw {
+		e.raw[i].qc.Value *= factor
+		e.raw[i].qt.Value *= factor
+	}
+	return nil
+}
+
+// nothing is a resistance that is none, in MPa or any smaller unit.
+const nothing = 1e-6
+
+// inGround returns the stretch between the first and the last reading that
+// meets any resistance.
+func (e *evaluation) inGround() (from, to int) {
+	to = len(e.raw)
+	for from < to && e.raw[from].resistance() <= nothing {
+		from++
+	}
+	for to > from && e.raw[to-1].resistance() <= nothing {
+		to--
+	}
+	return from, to
+}
+
+// areaRatio settles the area ratio and says what its absence costs.
+func (e *evaluation) areaRatio() {
+	a := e.AreaRatio
+	switch {
+	case a.Known && a.Value > 1 && a.Value <= 100:
+		e.say("area ratio %g taken as percent: %g", a.Value, a.Value/100)
+		a.Value /= 100
+	case a.Known && !(a.Value > 0 && a.Value <= 1):
+		e.say("area ratio %g is not between 0 and 1: not used", a.Value)
+		a = Measure{}
+	}
+	e.area = a
+	var share, apart []float64
+	uncorrected, dry := 0, 0
+	for i := range e.raw {
+		x := &e.raw[i]
+		switch {
+		case x.qt.Known:
+			if x.qc.Known && x.u2.Known && a.Known && x.qt.Value > 0 {
+				apart = append(apart, math.Abs(x.qc.Value+(1-a.Value)*x.u2.Value/1000-x.qt.Value)/x.qt.Value)
+			}
+		case !x.u2.Known:
+			dry++
+		case !a.Known:
+			uncorrected++
+			if net := 1000*x.qc.Value - x.state.Total; net > 0 {
+				share = append(share, (1-usualAreaRatio)*x.u2.Value/net)
+			}
+		}
+	}
+	if m := median(apart); m > 0.05 {
+		e.say("qt as given differs by %.0f %% from qc + (1 − %g)·u2: another area ratio was used; qt is taken as given", 100*m, a.Value)
+	}
+	if uncorrected > 0 {
+		e.say("no area ratio: qt is taken as qc, not corrected for u2; with a ratio of %g the net resistance would be about %.0f %% higher",
+			usualAreaRatio, 100*median(share))
+	}
+	if dry > 0 {
+		e.say("%d of %d depths have no u2: qt is taken as qc there, and σ′p comes from the net resistance alone", dry, len(e.raw))
+	}
+}
+
+// usualAreaRatio is a common value, to say what the correction is worth.
+const usualAreaRatio = 0.8
+
+// poreOffset drops u2 that cannot be and says where it begins below zero.
+func (e *evaluation) poreOffset() {
+	impossible, negative, known := 0, 0, 0
+	var dry []float64
+	for i := range e.raw {
+		x := &e.raw[i]
+		if !x.u2.Known {
+			continue
+		}
+		known++
+		if x.state.Pore <= 0 && len(dry) < 50 {
+			dry = append(dry, x.u2.Value)
+		}
+		switch {
+		case x.u2.Value < vacuum:
+			impossible++
+			x.u2 = Measure{}
+		case x.u2.Value < 0:
+			negative++
+		}
+	}
+	if impossible > 0 {
+		e.say("u2 below a full vacuum (%g kPa) at %d of %d depths: not used there; the sensor's zero is off", vacuum, impossible, known)
+	}
+	if start := median(dry); len(dry) >= 3 && start < -5 {
+		e.say("u2 is about %.0f kPa above the water table, where it should be near zero: a zero offset of the sensor? Not corrected", start)
+	} else if negative > 0 {
+		e.say("u2 is negative at %d of %d depths: a zero offset, a filter not saturated, or dilative clay; the excess pressure gives no σ′p there", negative, known)
+	}
+}
+
+// vacuum is the lowest gauge pressure that water can have, kPa.
+const vacuum = -101.3
+
+// evaluate computes the points, and says where the cone met nothing.
+func (e *evaluation) evaluate() []Point {
+	points := make([]Point, 0, len(e.raw))
+	empty, leading, trailing := 0, 0, 0
+	bottom := 0.0
+	for i := range e.raw {
+		x := &e.raw[i]
+		p, ok := e.point(x)
+		if !ok {
+			if len(points) == 0 {
+				leading++
+			} else {
+				trailing++
+			}
+			continue
+		}
+		empty += trailing
+		trailing, bottom = 0, x.depth
+		points = append(points, p)
+	}
+	if leading > 0 && len(points) > 0 {
+		e.say("no resistance beyond the weight of the ground down to %.2f m (%d depths left out): air, water or a predrilled hole", points[0].Depth, leading)
+	}
+	if empty > 0 {
+		e.say("%d depths left out: resistance below the weight of the ground", empty)
+	}
+	if trailing > 0 {
+		e.say("no resistance beyond the weight of the ground below %.2f m (%d depths left out): the sounding stops in air or was being withdrawn", bottom, trailing)
+	}
+	return points
+}
+
+// mixedSigns says where the resistance is that of sand and the pore pressure that
+// of clay: sand drains while the cone passes, so a factor of 10 in qc is likelier.
+func (e *evaluation) mixedSigns(points []Point) {
+	mixed, judged := 0, 0
+	for i := range points {
+		p := &points[i]
+		if !p.Excess.Known || !p.BehaviourIndex.Known {
+			continue
+		}
+		judged++
+		mixed += oneIf(p.BehaviourIndex.Value < e.ClayFrom && p.Excess.Value > p.State.Effective)
+	}
+	if 2*mixed > judged {
+		e.say("the resistance is that of sand and the pore pressure that of clay at %d of %d depths: qc may be in bar or kgf/cm², ten times too large; used as given", mixed, judged)
+	}
+}
+
+// point evaluates one depth; ok is false where there is no net resistance.
+func (e *evaluation) point(x *raw) (p Point, ok bool) {
+	qt := 1000 * x.resistance()
+	if !x.qt.Known && x.u2.Known && e.area.Known {
+		qt += (1 - e.area.Value) * x.u2.Value
+	}
+	net := qt - x.state.Total
+	if x.resistance() <= nothing || !(net > 0) {
+		return Point{}, false
+	}
+	p = Point{Depth: x.depth, Readings: x.n, Stratum: e.stratum(x.depth), State: x.state,
+		Corrected: qt, Net: net, Q: net / x.state.Effective}
+	if x.u2.Known {
+		p.Excess = Of(x.u2.Value - x.state.Pore)
+		p.EffectiveCone = Of(qt - x.u2.Value)
+		p.PorePressureRatio = Of(p.Excess.Value / net)
+	}
+	if x.fs.Known {
+		p.FrictionRatio = Of(100 * math.Max(x.fs.Value, 0) / net)
+		p.BehaviourIndex = BehaviourIndex(net, x.state.Effective, p.FrictionRatio.Value)
+	}
+	p.Clay = !p.BehaviourIndex.Known || p.BehaviourIndex.Value >= e.ClayFrom
+	return p, true
+}
+
+// stratum returns the index of the stratum that holds a depth, −1 for none. A
+// boundary belongs to the stratum below it.
+func (e *evaluation) stratum(depth float64) int {
+	for i, s := range e.Strata {
+		if depth >= s.Top && depth < s.Base {
+			return i
+		}
+	}
+	return -1
+}
