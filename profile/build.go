@@ -27,7 +27,14 @@ func Build(site *Site, opt Options) (*Profile, error) {
 		return nil, problems.asError()
 	}
 	for _, g := range grounds {
-		p.Boreholes = append(p.Boreholes, g.profile(site, p.Specimens))
+		b := g.profile(site, p.Specimens)
+		var found Problems
+		b.Cone, found = g.cone(site, b.Tests)
+		problems = append(problems, found...)
+		p.Boreholes = append(p.Boreholes, b)
+	}
+	if len(problems) > 0 {
+		return nil, problems.asError()
 	}
 	for i, g := range grounds {
 		b := &p.Boreholes[i]

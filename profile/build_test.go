@@ -373,3 +373,53 @@ func BenchmarkBuild(b *testing.B) {
 		}
 	}
 }
+
+// TestConeSpeaksBesideTheTests puts a sounding of constant net resistance beside
+// the clay: 0.33·qnet lies near the tests, so the factor stays near the
+// published one and the sounding narrows the band where no test is.
+func TestConeSpeaksBesideTheTests(t *testing.T) {
+	s := softSite()
+	sounding := Sounding{Borehole: "BH1", AreaRatio: Known(0.8)}
+	for i := range 100 {
+		z := 2 + float64(i)*0.1
+		sounding.Readings = append(sounding.Readings, ConeReading{Depth: z, CorrectedResistance: Known((16*z + 4 + 210) / 1000)})
+	}
+	s.Soundings = []Sounding{sounding}
+	with, without := build(t, s).Boreholes[0], build(t, softSite()).Boreholes[0]
+	if with.Cone == nil || len(with.Cone.Layers) < 10 {
+		t.Fatalf("cone %+v", with.Cone)
+	}
+	if f := with.Cone.Factors[0]; f.Tests != 3 || f.Factor.Best < 0.25 || f.Factor.Best > 0.45 {
+		t.Errorf("factor %+v, want one near 0.33 from three tests", f)
+	}
+	width := func(p BoreholeProfile) float64 {
+		for _, pt := range p.Points {
+			if pt.Depth == 12 {
+				return math.Log(pt.Preconsolidation.High / pt.Preconsolidation.Low)
+			}
+		}
+		return 0
+	}
+	if a, b := width(with), width(without); !(a < b) {
+		t.Errorf("the band at 12 m is %g with the cone and %g without", a, b)
+	}
+}
+
+// TestConeInTheWrongUnitStopsTheRun gives resistances in kPa as if they were MPa.
+func TestConeInTheWrongUnitStopsTheRun(t *testing.T) {
+	s := softSite()
+	sounding := Sounding{Borehole: "BH1", AreaRatio: Known(0.8)}
+	for i := range 100 {
+		z := 2 + float64(i)*0.1
+		sounding.Readings = append(sounding.Readings, ConeReading{Depth: z, CorrectedResistance: Known(16*z + 200)})
+	}
+	s.Soundings = []Sounding{sounding}
+	p, err := Build(s, Options{})
+	said := err != nil && strings.Contains(err.Error(), "cone")
+	if err == nil {
+		said = strings.Contains(strings.Join(p.Boreholes[0].Cone.Notes, " "), "kPa")
+	}
+	if !said {
+		t.Errorf("a resistance of 400 MPa in soft clay went unsaid: %v", err)
+	}
+}

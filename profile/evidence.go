@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"pastload/correlate"
+	"pastload/profile/cone"
 	"pastload/profile/history"
 )
 
@@ -19,9 +20,9 @@ type source struct {
 
 // sources lists the in-situ evidence in the results table.
 var sources = []source{
-	{"cone, net resistance", "mayne-1995-qnet", func(r *Result) bool { return r.NetConeResistance.Known }},
-	{"cone, excess pore pressure", "chen-mayne-1996-du2", func(r *Result) bool { return r.ExcessConePressure.Known }},
-	{"cone, effective resistance", "mayne-2005-qeff", func(r *Result) bool { return r.EffectiveCone.Known }},
+	{coneSources[cone.NetResistance], "mayne-1995-qnet", func(r *Result) bool { return r.NetConeResistance.Known }},
+	{coneSources[cone.ExcessPressure], "chen-mayne-1996-du2", func(r *Result) bool { return r.ExcessConePressure.Known }},
+	{coneSources[cone.EffectiveResistance], "mayne-2005-qeff", func(r *Result) bool { return r.EffectiveCone.Known }},
 	{"field vane", "mayne-mitchell-1988-yield", func(r *Result) bool { return r.UndrainedStrength.Known && isVane(r) }},
 	{"undrained strength", "mesri-1975-yield", func(r *Result) bool { return r.UndrainedStrength.Known && !isVane(r) }},
 	{"standard penetration test", "mayne-kemper-1988-yield", func(r *Result) bool { return r.N60.Known }},
@@ -52,7 +53,7 @@ func (g *ground) evidence(site *Site, p *Profile, b *BoreholeProfile, stations [
 		}
 	}
 	in.Neighbours = g.neighbours(p)
-	in.Readings = g.readings(site, b)
+	in.Readings = append(g.readings(b), b.Cone.readings(g)...)
 	in.Known = g.known(site)
 	for i, st := range stations {
 		pt := &b.Points[i]
@@ -132,13 +133,16 @@ func (g *ground) neighbours(p *Profile) []history.Test {
 	return out
 }
 
-// readings evaluates the in-situ evidence of the results table and of the cone.
-func (g *ground) readings(site *Site, b *BoreholeProfile) []history.Reading {
+// readings evaluates the in-situ evidence of the results table.
+func (g *ground) readings(b *BoreholeProfile) []history.Reading {
 	var out []history.Reading
 	for i := range b.Results {
 		d := &b.Results[i]
 		if !d.Effective.Known || d.Effective.Value <= 0 {
 			continue
+		}
+		if s := g.borehole.StratumAt(d.Depth, d.Stratum); s != nil && isOrganic(s) {
+			continue // the relations are for inorganic clay
 		}
 		v := d.Result.values(d.Effective)
 		for _, s := range sources {

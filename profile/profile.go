@@ -79,6 +79,7 @@ type BoreholeProfile struct {
 	Zones       []ZoneInterval   `json:"zones"`
 	Strata      []StratumProfile `json:"strata"`
 	Results     []DerivedResult  `json:"results"`
+	Cone        *ConeProfile     `json:"cone,omitempty"`
 	Assumptions []Assumption     `json:"assumptions"`
 	Notes       []string         `json:"notes"`
 }

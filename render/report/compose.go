@@ -46,6 +46,7 @@ func Compose(c Content) *Document {
 		d.add(fmt.Sprintf("profile-%d", i+1), "Stress history with depth: "+b.Borehole, profileBlocks(b)...)
 	}
 	d.add("tests", "Preconsolidation tests", testBlocks(p, figures.Curves)...)
+	d.add("cone", "Cone soundings", ConeFactors(p.Boreholes...), ConeNotes(p.Boreholes...), Cone(p.Boreholes...))
 	d.add("compression", "Compressibility", Compression(p.Boreholes...))
 	d.add("values", "Values per stratum", valueBlocks(c.Values, c.Design)...)
 	d.add("results", "Results as read", Results(s))

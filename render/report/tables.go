@@ -220,6 +220,66 @@ func correlationIDs(d profile.DerivedResult) string {
 	return strings.Join(ids, " ")
 }
 
+// Cone returns the cone soundings condensed by layer.
+func Cone(bs ...profile.BoreholeProfile) *Table {
+	t := &Table{
+		Name: "cone", Title: "Cone soundings by layer",
+		Columns: []Column{
+			{"borehole", "borehole", Words, 0}, {"from", "top", Length, 2}, {"to", "base", Length, 2}, {"stratum", "stratum", Words, 0}, {"depths used", "readings", Count, 0},
+			{"qt − σv0", "net_cone_resistance", Stress, 0}, {"u2 − u0", "excess_cone_pore_pressure", Stress, 0}, {"qt − u2", "effective_cone_resistance", Stress, 0},
+			{"Ic", "soil_behaviour_index", Pure, 2},
+			{"σ′p from qt − σv0", "preconsolidation_from_net", Stress, 0}, {"from u2 − u0", "preconsolidation_from_excess", Stress, 0}, {"from qt − u2", "preconsolidation_from_effective", Stress, 0},
+		},
+		Note: "σ′p by the published factors, before the tests beside the sounding are heard.",
+	}
+	for _, b := range bs {
+		if b.Cone == nil {
+			continue
+		}
+		for _, l := range b.Cone.Layers {
+			t.Add(T(b.Borehole), N(l.Top), N(l.Base), T(l.Stratum), N(float64(l.Readings)), number(l.Net), number(l.Excess), number(l.EffectiveCone),
+				number(l.BehaviourIndex), number(l.FromNet), number(l.FromExcess), number(l.FromEffective))
+		}
+	}
+	return t
+}
+
+// ConeFactors returns the site's own cone factors beside the published ones.
+func ConeFactors(bs ...profile.BoreholeProfile) *Table {
+	t := &Table{
+		Name: "cone-factors", Title: "Cone factors: published, and the site's own",
+		Columns: []Column{
+			{"borehole", "borehole", Words, 0}, {"cone value", "cone_value", Words, 0}, {"published", "published_factor", Pure, 2},
+			{"low", "factor_low", Pure, 2}, {"best", "factor", Pure, 2}, {"high", "factor_high", Pure, 2}, {"tests beside it", "tests", Count, 0}, {"remarks", "notes", Words, 0},
+		},
+		Note: "σ′p = factor times cone value. The published factors are from memory, unverified; the site's own weighs them against the oedometer tests beside the sounding.",
+	}
+	for _, b := range bs {
+		if b.Cone == nil {
+			continue
+		}
+		for _, f := range b.Cone.Factors {
+			c := three(f.Factor)
+			t.Add(T(b.Borehole), T(f.ConeValue), N(f.Published), c[0], c[1], c[2], N(float64(f.Tests)), T(strings.Join(f.Notes, "; ")))
+		}
+	}
+	return t
+}
+
+// ConeNotes returns what there is to say of the soundings.
+func ConeNotes(bs ...profile.BoreholeProfile) *Table {
+	t := &Table{Name: "cone-notes", Title: "Remarks on the cone soundings", Columns: []Column{{"borehole", "borehole", Words, 0}, {"remark", "remark", Words, 0}}}
+	for _, b := range bs {
+		if b.Cone == nil {
+			continue
+		}
+		for _, n := range b.Cone.Notes {
+			t.Add(T(b.Borehole), T(n))
+		}
+	}
+	return t
+}
+
 // Results returns everything that was measured, as read and converted, with its
 // place in the tables.
 func Results(s *profile.Site) *Table {
@@ -364,7 +424,7 @@ func Tables(c Content) []*Table {
 	all := []*Table{
 		Points(p.Boreholes...), Tests(p.Boreholes...), Zones(p.Boreholes...), Strata(p.Boreholes...),
 		Specimens(p.Specimens), Methods(p.Specimens), Grades(p.Specimens),
-		Compression(p.Boreholes...), Layers(p.Site), Water(p.Site), Results(p.Site), Assumptions(p.Boreholes...), Sources(p.Site), Design(c.Values), DesignWarnings(c.Values),
+		Cone(p.Boreholes...), ConeFactors(p.Boreholes...), ConeNotes(p.Boreholes...), Compression(p.Boreholes...), Layers(p.Site), Water(p.Site), Results(p.Site), Assumptions(p.Boreholes...), Sources(p.Site), Design(c.Values), DesignWarnings(c.Values),
 	}
 	if c.Design {
 		all = append(all, Ways(c.Values), Line(p, c.Values))
