@@ -1,0 +1,35 @@
+package review
+
+import (
+	"pastload/profile"
+)
+
+// Review checks a profile with every rule and returns what does not agree, the
+// heaviest first. Decisions of the site answer the findings they are about.
+//
+// The error is of type DecisionProblems: decisions that match nothing. The
+// findings are complete all the same.
+func Review(p *profile.Profile) (Findings, error) {
+	c := newContext(p)
+	var found Findings
+	moved := c.misplaced(&found)
+	for _, r := range c.rows {
+		if !moved[r.index] {
+			found = append(found, c.rowFindings(r)...)
+		}
+	}
+	for i := range rules {
+		if rules[i].check != nil {
+			found = append(found, rules[i].check(c)...)
+		}
+	}
+	found = c.merge(found)
+	problems := c.answer(found)
+	found = append(found, c.staleDecisions(found)...)
+	found.sort(c.order)
+	found.identify()
+	if len(problems) > 0 {
+		return found, problems
+	}
+	return found, nil
+}
