@@ -3,6 +3,7 @@ package design
 import (
 	"fmt"
 	"math"
+	"slices"
 	"sort"
 )
 
@@ -59,7 +60,7 @@ func TheilSen(s Sample) (slope, intercept float64, err error) {
 		return 0, 0, err
 	}
 	s = s.ordered()
-	var slopes []float64
+	slopes := make([]float64, 0, len(s)*(len(s)-1)/2)
 	for i, a := range s {
 		for _, b := range s[i+1:] {
 			if a.Depth != b.Depth {
@@ -70,14 +71,58 @@ func TheilSen(s Sample) (slope, intercept float64, err error) {
 	if len(slopes) == 0 {
 		return 0, 0, fmt.Errorf("%w: no two depths for a slope", ErrTooFew)
 	}
-	sort.Float64s(slopes)
-	slope = median(slopes)
+	slope = middleOf(slopes)
 	rest := make([]float64, len(s))
 	for i, o := range s {
 		rest[i] = o.Value - slope*o.Depth
 	}
-	sort.Float64s(rest)
-	return slope, median(rest), nil
+	return slope, middleOf(rest), nil
+}
+
+// middleOf returns the median of values that it may reorder. A thousand results
+// have half a million slopes, which take far longer to sort than to halve.
+func middleOf(v []float64) float64 {
+	k := len(v) / 2
+	upper := nth(v, k)
+	if len(v)%2 == 1 {
+		return upper
+	}
+	lower := slices.Max(v[:k])
+	return lower + (upper-lower)/2
+}
+
+// nth puts the k-th smallest value in its place, nothing greater before it and
+// nothing smaller after, and returns it (Hoare's selection; the pivot is the
+// middle of three, so that sorted input is no bad case).
+func nth(v []float64, k int) float64 {
+	low, high := 0, len(v)-1
+	for low < high {
+		a, b, c := v[low], v[low+(high-low)/2], v[high]
+		pivot := math.Max(math.Min(a, b), math.Min(math.Max(a, b), c))
+		i, j := low, high
+		for i <= j {
+			for v[i] < pivot {
+				i++
+			}
+			for v[j] > pivot {
+				j--
+			}
+			if i <= j {
+				v[i], v[j] = v[j], v[i]
+				i++
+				j--
+			}
+		}
+		switch {
+		case k <= j:
+			high = j
+		case k >= i:
+			low = i
+		default:
+			return v[k]
+		}
+	}
+	return v[k]
 }
 
 // GrubbsCritical returns the two-sided 5 % critical value of Grubbs' test:

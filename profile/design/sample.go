@@ -37,14 +37,18 @@ func (o Observation) weight() float64 {
 // rows never matters.
 type Sample []Observation
 
+// largest bounds what is computed with, so that no sum of squares overflows. No
+// quantity of the ground comes near it.
+const largest = 1e100
+
 // check returns an error where a value, depth or weight cannot be computed with.
 func (s Sample) check() error {
 	for _, o := range s {
-		if math.IsNaN(o.Value) || math.IsInf(o.Value, 0) || math.IsNaN(o.Depth) || math.IsInf(o.Depth, 0) {
+		if !(math.Abs(o.Value) <= largest) || !(math.Abs(o.Depth) <= largest) {
 			return fmt.Errorf("%w: %s at %g m is %g; want finite numbers", ErrOutOfRange, o.Label, o.Depth, o.Value)
 		}
-		if !(o.Weight >= 0) || math.IsInf(o.Weight, 0) {
-			return fmt.Errorf("%w: weight of %s at %g m is %g; want zero or more", ErrOutOfRange, o.Label, o.Depth, o.Weight)
+		if o.Weight != 0 && !(o.Weight >= 1/largest && o.Weight <= largest) {
+			return fmt.Errorf("%w: weight of %s at %g m is %g; want more than zero, or zero for one", ErrOutOfRange, o.Label, o.Depth, o.Weight)
 		}
 	}
 	return nil
@@ -203,6 +207,16 @@ func (d Distribution) back(v float64) float64 {
 		return math.Exp(v)
 	}
 	return v
+}
+
+// interval returns centre ∓ margin of the working scale as the quantity. The error
+// wraps ErrOutOfRange where that is too large for a number.
+func (d Distribution) interval(centre, margin float64) (Interval, error) {
+	i := Interval{d.back(centre - margin), d.back(centre + margin)}
+	if !(math.Abs(i.Low) <= math.MaxFloat64) || !(math.Abs(i.High) <= math.MaxFloat64) {
+		return Interval{}, fmt.Errorf("%w: the margin is too wide for a number", ErrOutOfRange)
+	}
+	return i, nil
 }
 
 // spread returns the standard deviation on the working scale of a quantity with

@@ -35,6 +35,10 @@ func SimpleVarianceReduction(length, scale float64) (float64, error) {
 	return math.Min(1, scale/length), nil
 }
 
+// negligible is the exponent below which a correlation is lost beside one in double
+// precision.
+const negligible = 40
+
 // EffectiveCount returns how many independent values a sample is worth to its
 // mean when values of one borehole are correlated with depth:
 //
@@ -58,9 +62,11 @@ func EffectiveCount(s Sample, scale float64) (float64, error) {
 	for i, a := range s {
 		sum++
 		for _, b := range s[i+1:] {
-			if a.Borehole == b.Borehole {
-				sum += 2 * math.Exp(-2*math.Abs(a.Depth-b.Depth)/scale)
+			apart := 2 * (b.Depth - a.Depth) / scale
+			if a.Borehole != b.Borehole || apart > negligible {
+				break // ordered by borehole and depth: all further ones lie further
 			}
+			sum += 2 * math.Exp(-apart)
 		}
 	}
 	n := float64(len(s))
@@ -94,7 +100,7 @@ func AverageOver(s Sample, d Distribution, length, scale float64) (Interval, err
 	}
 	m := moments(scaled)
 	margin := Student95(n-1) * m.SD * math.Sqrt(reduction+1/n)
-	return Interval{d.back(m.Mean - margin), d.back(m.Mean + margin)}, nil
+	return d.interval(m.Mean, margin)
 }
 
 // CombinedCOV returns the coefficient of variation of a value that is averaged

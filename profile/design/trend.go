@@ -173,8 +173,7 @@ func (l DepthLine) around(depth, k float64) (Interval, error) {
 		return Interval{}, fmt.Errorf("%w: %.2f m lies beyond the tests at %.2f to %.2f m", ErrOutOfRange, depth, l.From, l.To)
 	}
 	half := k * Student95(float64(l.N-2)) * l.SD
-	x := l.at(depth)
-	return Interval{l.Distribution.back(x - half), l.Distribution.back(x + half)}, nil
+	return l.Distribution.interval(l.at(depth), half)
 }
 
 // residuals returns what is left of a sample on the working scale without the

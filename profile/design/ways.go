@@ -153,7 +153,7 @@ func (w Way) Of(s Sample, a Assumptions) (Interval, error) {
 	if !ok {
 		return Interval{}, fmt.Errorf("%w: %s wants a COV, a mean above zero and more than one independent value", ErrOutOfRange, w.Name)
 	}
-	return Interval{d.back(b.Mean - margin), d.back(b.Mean + margin)}, nil
+	return d.interval(b.Mean, margin)
 }
 
 // An Alternative is what one way gives for a parameter.
