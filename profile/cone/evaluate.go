@@ -48,7 +48,13 @@ func Evaluate(readings []Reading, stress Stress, o Options) (Sounding, error) {
 // are returned with it.
 func (r *Reducer) Result(stress Stress) (Sounding, error) {
 	e := evaluation{Options: r.options, stress: stress, notes: r.count.notes(r.options)}
-	e.gather(r.cells)
+	e.raw = make([]raw, 0, r.filled)
+	for _, p := range r.pages {
+		if p != nil {
+			e.gather(p)
+		}
+	}
+	e.sayGathered()
 	if len(e.raw) == 0 {
 		return Sounding{Notes: e.notes}, fmt.Errorf("%w: none of %d has a depth, a resistance and a known stress", ErrNoReadings, r.count.read)
 	}
@@ -73,6 +79,8 @@ type evaluation struct {
 	notes  []string
 	raw    []raw
 	area   Measure
+
+	noStress int // readings where no stress is known
 }
 
 // raw is a cell as it was read, beside the stress there.
@@ -87,26 +95,27 @@ func (e *evaluation) say(format string, args ...any) {
 	e.notes = append(e.notes, fmt.Sprintf(format, args...))
 }
 
-// gather lists the cells that have readings and a stress, by depth.
-func (e *evaluation) gather(cells []cell) {
-	noStress := 0
-	for i := range cells {
-		c := &cells[i]
+// gather lists the cells of a metre that have readings and a stress, by depth.
+func (e *evaluation) gather(p *page) {
+	for i := range p {
+		c := &p[i]
 		if c.n == 0 {
 			continue
 		}
 		depth := c.depth / float64(c.n)
 		state, ok := e.stress(depth)
 		if !ok || !finite(state.Total) || !finite(state.Pore) || !finite(state.Effective) || state.Effective <= 0 {
-			noStress += int(c.n)
+			e.noStress += int(c.n)
 			continue
 		}
-		x := raw{depth: depth, n: int(c.n), state: state,
-			qc: mean(c.qc, c.qcN), qt: mean(c.qt, c.qtN), fs: mean(c.fs, c.fsN), u2: mean(c.u2, c.u2N)}
-		e.raw = append(e.raw, x)
+		e.raw = append(e.raw, raw{depth: depth, n: int(c.n), state: state,
+			qc: mean(c.qc, c.qcN), qt: mean(c.qt, c.qtN), fs: mean(c.fs, c.fsN), u2: mean(c.u2, c.u2N)})
 	}
-	if noStress > 0 {
-		e.say("%d readings left out: no effective stress greater than zero is known there", noStress)
+}
+
+func (e *evaluation) sayGathered() {
+	if e.noStress > 0 {
+		e.say("%d readings left out: no effective stress greater than zero is known there", e.noStress)
 	}
 	if e.PoreShift != 0 {
 		e.say("%g kPa was added to every u2, as asked", e.PoreShift)
@@ -124,8 +133,7 @@ func (x *raw) resistance() float64 {
 // units finds readings in another unit than they are said to be, and converts
 // them where only one unit makes sense.
 func (e *evaluation) units() error {
-	var s sizes
-	var u2, u0 []float64
+	u2, u0 := make([]float64, 0, len(e.raw)), make([]float64, 0, len(e.raw))
 	for i := range e.raw {
 		if x := &e.raw[i]; x.u2.Known {
 			u2, u0 = append(u2, x.u2.Value), append(u0, x.state.Pore)
@@ -137,6 +145,7 @@ func (e *evaluation) units() error {
 	}
 	// Air and predrilled holes at the ends say nothing of the unit.
 	from, to := e.inGround()
+	s := newSizes(to - from)
 	for i := range e.raw {
 		x := &e.raw[i]
 		x.u2.Value = x.u2.Value*wet + e.PoreShift
@@ -194,7 +203,7 @@ func (e *evaluation) areaRatio() {
 		a = Measure{}
 	}
 	e.area = a
-	var share, apart []float64
+	share, apart := make([]float64, 0, len(e.raw)), make([]float64, 0, len(e.raw))
 	uncorrected, dry := 0, 0
 	for i := range e.raw {
 		x := &e.raw[i]

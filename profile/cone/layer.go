@@ -77,10 +77,9 @@ func find(id string, factor float64) relation {
 }
 
 const (
-	leastDepths = 3   // in a window, for a median to mean something
-	edge        = 0.1 // m next to a boundary that a cone reads through
-	fluctuation = 0.3 // m, vertical scale of fluctuation of qt in clay; from memory, unverified
-	madToSD     = 1.4826
+	leastDepths = 3      // in a window, for a median to mean something
+	edge        = 0.1    // m next to a boundary that a cone reads through
+	fluctuation = 0.3    // m, vertical scale of fluctuation of qt in clay; from memory, unverified
 	medianError = 1.2533 // standard error of a median over that of a mean
 )
 
@@ -223,22 +222,13 @@ func (w *window) finish(l *Layer, length float64) {
 	// scales of fluctuation.
 	independent := math.Max(1, math.Min(float64(l.Used), length/fluctuation))
 	own := medianError * l.LnSD / math.Sqrt(independent)
+	l.Yield = make([]Yield, 0, len(sources))
 	for i, value := range [...]Measure{l.Net, l.Excess, l.EffectiveCone} {
 		if r := sources[i]; value.Known && value.Value > 0 {
 			l.Yield = append(l.Yield, Yield{Correlation: r.id, Source: Source(i), Cone: value.Value, Value: r.factor * value.Value,
 				Own: math.Hypot(r.scatter.Within, own), Shared: r.scatter.Between})
 		}
 	}
-}
-
-// robustSD is the standard deviation by the median absolute deviation. It
-// destroys its argument.
-func robustSD(x []float64) float64 {
-	m := median(x)
-	for i := range x {
-		x[i] = math.Abs(x[i] - m)
-	}
-	return madToSD * median(x)
 }
 
 // At returns the median of a cone value over the clay within half of depth, and

@@ -27,10 +27,14 @@ type cell struct {
 // merges repeated ones. The zero Reducer is not ready: use NewReducer.
 type Reducer struct {
 	options Options
-	cells   []cell
+	pages   []*page // by metre; nil where there is no reading
+	filled  int     // cells with readings
 	count   tally
 	last    float64
 }
+
+// A page is a metre of cells.
+type page [perMetre]cell
 
 // tally counts what is to be said of the readings.
 type tally struct {
@@ -62,11 +66,23 @@ func (r *Reducer) Add(x Reading) {
 		r.count.backwards++
 	}
 	r.last = x.Depth
-	i := int(math.Round(x.Depth * perMetre))
-	for len(r.cells) <= i {
-		r.cells = append(r.cells, cell{})
+	c := r.cell(int(math.Round(x.Depth * perMetre)))
+	if c.n == 0 {
+		r.filled++
 	}
-	r.cells[i].add(x, &r.count)
+	c.add(x, &r.count)
+}
+
+// cell returns a cell by its number from ground level down.
+func (r *Reducer) cell(i int) *cell {
+	metre := i / perMetre
+	for len(r.pages) <= metre {
+		r.pages = append(r.pages, nil)
+	}
+	if r.pages[metre] == nil {
+		r.pages[metre] = new(page)
+	}
+	return &r.pages[metre][i%perMetre]
 }
 
 func (c *cell) add(x Reading, count *tally) {

@@ -43,6 +43,12 @@ type sizes struct {
 	poreOver   []float64 // the resistance as given beside it
 }
 
+// newSizes has room for n cells.
+func newSizes(n int) sizes {
+	room := func() []float64 { return make([]float64, 0, n) }
+	return sizes{room(), room(), room(), room(), room()}
+}
+
 // resistanceUnit returns the factor to MPa, with a note where it is not 1 or is
 // in doubt. Readings that make sense as given stay as given.
 func (s sizes) resistanceUnit() (factor float64, note string, err error) {
@@ -128,13 +134,4 @@ func poreUnit(u2, u0 []float64) (factor float64, note string) {
 		return 1000, fmt.Sprintf("pore pressure u2: at most %.3g kPa as given where the ground has %.3g kPa: taken as MPa (factor 1000); correct the table", most, ground)
 	}
 	return 1, ""
-}
-
-// median sorts its argument. It is zero where there is nothing.
-func median(x []float64) float64 {
-	if len(x) == 0 {
-		return 0
-	}
-	slices.Sort(x)
-	return (x[(len(x)-1)/2] + x[len(x)/2]) / 2
 }
