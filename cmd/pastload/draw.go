@@ -9,6 +9,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"pastload/profile"
+	"pastload/profile/review"
 	"pastload/render/report"
 	"pastload/render/sheet"
 )
@@ -37,7 +38,11 @@ func newDrawCommand() *cobra.Command {
 				return err
 			}
 			for i, dir := range siteFolders(c.output, paths) {
-				figures, err := drawAll(profiles[i], page)
+				found, err := review.Review(profiles[i])
+				if err != nil {
+					return err
+				}
+				figures, err := drawAll(profiles[i], found, page)
 				if err != nil {
 					return err
 				}
@@ -66,7 +71,7 @@ func paperSize(name string) (sheet.Page, error) {
 
 // drawAll draws every sheet of a site: the depth profile of each borehole, then
 // the curve of each oedometer test.
-func drawAll(p *profile.Profile, page sheet.Page) (report.Figures, error) {
+func drawAll(p *profile.Profile, found review.Findings, page sheet.Page) (report.Figures, error) {
 	var out report.Figures
 	names := make([]string, len(p.Boreholes))
 	for i := range p.Boreholes {
@@ -77,6 +82,7 @@ func drawAll(p *profile.Profile, page sheet.Page) (report.Figures, error) {
 		in := sheet.DepthInput{
 			Borehole: *p.Site.Borehole(names[i]), Profile: p.Boreholes[i], Settings: p.Site.Settings,
 			Page: page, Figure: strconv.Itoa(i + 1), Sheet: i + 1, Of: len(names), ID: id,
+			Flags: flags(found, names[i]),
 		}
 		svg, err := drawn(func(w io.Writer) error { return sheet.Depth(w, in) })
 		if err != nil {
@@ -85,6 +91,27 @@ func drawAll(p *profile.Profile, page sheet.Page) (report.Figures, error) {
 		out.Depth = append(out.Depth, report.Figure{ID: id, Caption: "Depth profile of " + names[i], SVG: svg, Large: page.Name == sheet.A3.Name})
 	}
 	return out, nil
+}
+
+// flags marks the findings about a borehole by their numbers.
+func flags(found review.Findings, borehole string) []sheet.Flag {
+	var out []sheet.Flag
+	for i := range found {
+		f := &found[i]
+		mark := func(name string, depth profile.Number) {
+			if name == borehole && depth.Known {
+				out = append(out, sheet.Flag{Depth: depth.Value, Label: strconv.Itoa(i + 1)})
+			}
+		}
+		if f.Severity.Rank() < review.Doubt.Rank() {
+			continue
+		}
+		mark(f.Borehole, f.Depth)
+		for _, a := range f.Also {
+			mark(a.Borehole, a.Depth)
+		}
+	}
+	return out
 }
 
 // figureFiles makes files of figures, below a folder.

@@ -40,7 +40,7 @@ func exitStatus(err error, errw io.Writer) int {
 	var invalid intake.Problems
 	var unbuilt profile.Problems
 	switch {
-	case errors.As(err, &invalid), errors.As(err, &unbuilt):
+	case errors.As(err, &invalid), errors.As(err, &unbuilt), isDecisionProblem(err):
 		fmt.Fprintln(errw, err)
 		n := len(strings.Split(strings.TrimSpace(err.Error()), "\n"))
 		fmt.Fprintf(errw, "pastload: %s in the input; nothing was written\n", plural(n, "problem"))

@@ -7,6 +7,7 @@ import (
 
 	"pastload/profile"
 	"pastload/profile/design"
+	"pastload/profile/review"
 	"pastload/render/report"
 	"pastload/render/sheet"
 )
@@ -51,7 +52,11 @@ func newReportCommand() *cobra.Command {
 
 // reportFiles makes every file of a report in memory.
 func reportFiles(p *profile.Profile, u report.Units, withDesign bool) ([]file, error) {
-	figures, err := drawAll(p, sheet.A3)
+	found, err := review.Review(p)
+	if err != nil {
+		return nil, err
+	}
+	figures, err := drawAll(p, found, sheet.A3)
 	if err != nil {
 		return nil, err
 	}
@@ -62,7 +67,7 @@ func reportFiles(p *profile.Profile, u report.Units, withDesign bool) ([]file, e
 	if !withDesign {
 		values = design.WithoutDesign(values)
 	}
-	content := report.Content{Profile: p, Figures: figures, Values: values, Design: withDesign}
+	content := report.Content{Profile: p, Figures: figures, Values: values, Found: found, Design: withDesign}
 	var page, book bytes.Buffer
 	if err := report.Compose(content).WriteHTML(&page, u); err != nil {
 		return nil, err

@@ -90,6 +90,7 @@ names, or a single CSV of results with depth. Start with:
 		newCorrelateCommand(),
 		newYieldCommand(),
 		newDesignCommand(),
+		newReviewCommand(),
 	)
 	for _, c := range append(root.Commands(), root) {
 		c.Args = usageArgs(c.Args)

@@ -6,6 +6,7 @@ import (
 
 	"pastload/profile"
 	"pastload/profile/design"
+	"pastload/profile/review"
 )
 
 // A Figures set is the drawings of a report.
@@ -20,6 +21,7 @@ type Content struct {
 	Profile *profile.Profile
 	Figures Figures
 	Values  []design.Stratum
+	Found   review.Findings
 	Design  bool // cautious and adopted values go in; without it the report keeps to what was measured and derived
 }
 
@@ -48,6 +50,7 @@ func Compose(c Content) *Document {
 	d.add("tests", "Preconsolidation tests", testBlocks(p, figures.Curves)...)
 	d.add("cone", "Cone soundings", ConeFactors(p.Boreholes...), ConeNotes(p.Boreholes...), Cone(p.Boreholes...))
 	d.add("compression", "Compressibility", Compression(p.Boreholes...))
+	d.add("findings", "Findings and decisions", findingBlocks(c.Found, s)...)
 	d.add("values", "Values per stratum", valueBlocks(c.Values, c.Design)...)
 	d.add("results", "Results as read", Results(s))
 	d.add("assumptions", "Assumptions and limitations", limitations(p)...)
@@ -195,6 +198,20 @@ func testBlocks(p *profile.Profile, curves []Figure) []Block {
 	}
 	out = append(out, Specimens(p.Specimens), Grades(p.Specimens), Methods(p.Specimens))
 	return append(out, blocks(curves)...)
+}
+
+// findingBlocks are the report's section on results to doubt. The numbers are
+// those of the marks on the depth sheets.
+func findingBlocks(fs review.Findings, s *profile.Site) []Block {
+	if len(fs) == 0 {
+		return []Block{Paragraph("No result was found that does not agree with the others, with the laws it must obey or with what is usual."), Decisions(s)}
+	}
+	open := len(fs.Open())
+	return []Block{
+		Paragraph(fmt.Sprintf("%s, of which %d open. What was left out stays on the drawings and in the tables, with the reason.", counted(len(fs), "finding"), open)),
+		Findings(fs).Only("number", "severity", "borehole", "depth", "specimen", "quantity", "message", "causes", "action", "answer"),
+		Decisions(s),
+	}
 }
 
 func limitations(p *profile.Profile) []Block {
