@@ -44,6 +44,31 @@ func (b Box) Overlap(o Box) float64 {
 	return w * h
 }
 
+// Cut returns the part of a line that lies in the box (Liang & Barsky 1984), and
+// whether there is any.
+func (b Box) Cut(from, to Point) (Point, Point, bool) {
+	const shortest = 1e-9 // of the line
+	t0, t1 := 0.0, 1.0
+	dx, dy := to.X-from.X, to.Y-from.Y
+	for _, edge := range [4][2]float64{
+		{-dx, from.X - b.Left}, {dx, b.Right - from.X}, {-dy, from.Y - b.Top}, {dy, b.Bottom - from.Y},
+	} {
+		p, q := edge[0], edge[1]
+		switch {
+		case p == 0 && q < 0:
+			return from, to, false
+		case p < 0:
+			t0 = math.Max(t0, q/p)
+		case p > 0:
+			t1 = math.Min(t1, q/p)
+		}
+	}
+	if !(t1-t0 > shortest) {
+		return from, to, false
+	}
+	return Point{from.X + t0*dx, from.Y + t0*dy}, Point{from.X + t1*dx, from.Y + t1*dy}, true
+}
+
 // A Canvas takes a drawing and writes it as SVG.
 type Canvas struct {
 	sheet Sheet

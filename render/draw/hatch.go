@@ -189,24 +189,9 @@ func (h *hatch) ring(x, y, r float64, n int) {
 	}
 }
 
-// stroke adds the part of a line that lies in the box (Liang & Barsky 1984).
+// stroke adds the part of a line that lies in the box.
 func (h *hatch) stroke(x1, y1, x2, y2 float64) {
-	t0, t1 := 0.0, 1.0
-	dx, dy := x2-x1, y2-y1
-	for _, edge := range [4][2]float64{
-		{-dx, x1 - h.box.Left}, {dx, h.box.Right - x1}, {-dy, y1 - h.box.Top}, {dy, h.box.Bottom - y1},
-	} {
-		p, q := edge[0], edge[1]
-		switch {
-		case p == 0 && q < 0:
-			return
-		case p < 0:
-			t0 = math.Max(t0, q/p)
-		case p > 0:
-			t1 = math.Min(t1, q/p)
-		}
-	}
-	if t1-t0 > 1e-9 {
-		h.lines = append(h.lines, [2]Point{{x1 + t0*dx, y1 + t0*dy}, {x1 + t1*dx, y1 + t1*dy}})
+	if a, b, ok := h.box.Cut(Point{x1, y1}, Point{x2, y2}); ok {
+		h.lines = append(h.lines, [2]Point{a, b})
 	}
 }

@@ -121,9 +121,9 @@ func rangeWords(r profile.Range) string {
 // ratio writes an overconsolidation ratio: two figures that mean something.
 func ratio(v float64) string {
 	if math.Abs(v) < 9.95 {
-		return minus(fmt.Sprintf("%.1f", v))
+		return decimals(v, 1)
 	}
-	return minus(fmt.Sprintf("%.0f", v))
+	return decimals(v, 0)
 }
 
 func zoneWords(z profile.ZoneInterval) string {

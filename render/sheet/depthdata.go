@@ -195,7 +195,7 @@ func (d *depthSheet) beyond(room *placer, edge, y float64, m draw.Marker, l draw
 	if m.Shape != draw.ArrowRight {
 		d.c.Marker(x, y, m)
 	}
-	room.taken = append(room.taken, draw.Box{Left: x - 1.2, Top: y - 1.2, Right: edge, Bottom: y + 1.2})
+	room.taken = append(room.taken, obstacle{draw.Box{Left: x - 1.2, Top: y - 1.2, Right: edge, Bottom: y + 1.2}, pointWeight})
 	room.around(d.c, x, y, 1.7, l, d.f.small)
 }
 

@@ -1,7 +1,6 @@
 package sheet
 
 import (
-	"fmt"
 	"math"
 
 	"pastload/profile"
@@ -236,7 +235,7 @@ func significant(v float64) string {
 	if math.Abs(v) >= 1000 {
 		v = math.Round(v/10) * 10
 	}
-	return fmt.Sprintf("%.0f", v)
+	return decimals(v, 0)
 }
 
 // boundSign is what stands before a value that is only a bound.

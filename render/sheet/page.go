@@ -2,6 +2,7 @@ package sheet
 
 import (
 	"fmt"
+	"strconv"
 
 	"pastload/profile"
 	"pastload/render/draw"
@@ -138,11 +139,14 @@ func joined(a, b string) string {
 }
 
 // metres writes a depth or level to the centimetre, as logs do.
-func metres(v float64) string {
+func metres(v float64) string { return decimals(v, 2) }
+
+// decimals writes a number with so many decimals.
+func decimals(v float64, n int) string {
 	if !finite(v) {
 		return "?"
 	}
-	return minus(fmt.Sprintf("%.2f", v))
+	return minus(strconv.FormatFloat(v, 'f', n, 64))
 }
 
 // minus gives figures the sign that belongs to them, and zero none.

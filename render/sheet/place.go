@@ -9,8 +9,22 @@ import (
 // A placer finds room for labels among what is already drawn in a panel.
 type placer struct {
 	area  draw.Box
-	taken []draw.Box
+	taken []obstacle
 }
+
+// An obstacle is a box that labels should keep clear of, the more so the heavier
+// it is: a line can be crossed, another label cannot.
+type obstacle struct {
+	draw.Box
+	weight float64
+}
+
+// The weights of obstacles.
+const (
+	lineWeight  = 1
+	pointWeight = 2
+	labelWeight = 8
+)
 
 // line marks the course of a line as taken.
 func (p *placer) line(points []draw.Point) {
@@ -20,23 +34,26 @@ func (p *placer) line(points []draw.Point) {
 		n := int(math.Min(400, math.Ceil(math.Hypot(b.X-a.X, b.Y-a.Y)/every)))
 		for k := 0; k < n; k++ {
 			t := float64(k) / float64(n)
-			p.point(a.X+t*(b.X-a.X), a.Y+t*(b.Y-a.Y), 0.35)
+			p.add(a.X+t*(b.X-a.X), a.Y+t*(b.Y-a.Y), 0.35, lineWeight)
 		}
 	}
 }
 
 // point marks a data point as taken.
-func (p *placer) point(x, y, r float64) {
-	p.taken = append(p.taken, draw.Box{Left: x - r, Top: y - r, Right: x + r, Bottom: y + r})
+func (p *placer) point(x, y, r float64) { p.add(x, y, r, pointWeight) }
+
+func (p *placer) add(x, y, r, weight float64) {
+	p.taken = append(p.taken, obstacle{draw.Box{Left: x - r, Top: y - r, Right: x + r, Bottom: y + r}, weight})
 }
 
-// cost is what a label in a box would cover, in mm², much more so outside.
+// cost is what a label in a box would cover, in weighted mm², and what of it would
+// stand outside the panel.
 func (p *placer) cost(b draw.Box) float64 {
 	inside := b.Overlap(p.area)
 	cost := 50 * (b.Width()*b.Height() - inside)
 	for _, t := range p.taken {
 		if t.Left < b.Right && t.Right > b.Left && t.Top < b.Bottom && t.Bottom > b.Top {
-			cost += b.Overlap(t)
+			cost += t.weight * b.Overlap(t.Box)
 		}
 	}
 	return cost
@@ -58,7 +75,7 @@ func (p *placer) at(c *draw.Canvas, candidates []draw.Point, anchors []draw.Anch
 	f.Anchor = anchors[best]
 	b := f.Bounds(candidates[best].X, candidates[best].Y, l)
 	c.Halo(candidates[best].X, candidates[best].Y, l, f)
-	p.taken = append(p.taken, b)
+	p.taken = append(p.taken, obstacle{b, labelWeight})
 	return b
 }
 

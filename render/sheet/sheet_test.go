@@ -65,6 +65,10 @@ func TestDepthGolden(t *testing.T) {
 	}
 }
 
+func TestCurveGolden(t *testing.T) {
+	golden(t, "curve-looped", drawCurve(t, looped()))
+}
+
 func TestDepthTwiceTheSame(t *testing.T) {
 	for _, c := range depthCases {
 		if !bytes.Equal(drawDepth(t, c.make()), drawDepth(t, c.make())) {
@@ -263,7 +267,10 @@ func TestDepthAnyNumbers(t *testing.T) {
 func TestSeriesToldApartWithoutColour(t *testing.T) {
 	// Points are told apart by shape and fill, lines by dash and width.
 	sheets := map[string][]series{
-		"depth": append(append([]series(nil), grades...), totalLine, poreLine, effectiveLine, historyLine, designLine),
+		"curve": append(append([]series(nil), branches[:]...), series{name: "virgin line", pen: virginPen}, series{name: "last points", pen: lastPen},
+			series{name: "field curve", pen: fieldPen}, series{name: "σ′v0", pen: inSituPen}, series{name: "σ′p", pen: yieldPen}),
+		"constructions": {{name: "a", pen: constructionPens["two-line"]}, {name: "b", pen: constructionPens["casagrande"]}, {name: "c", pen: constructionPens["slope"]}, {name: "d", pen: constructionPens["pacheco-silva"]}},
+		"depth":         append(append([]series(nil), grades...), totalLine, poreLine, effectiveLine, historyLine, designLine),
 	}
 	for sheet, all := range sheets {
 		type look struct {
