@@ -67,7 +67,11 @@ func reportFiles(p *profile.Profile, u report.Units, withDesign bool) ([]file, e
 	if !withDesign {
 		values = design.WithoutDesign(values)
 	}
-	content := report.Content{Profile: p, Figures: figures, Values: values, Found: found, Design: withDesign}
+	effects, err := design.Effects(p)
+	if err != nil {
+		return nil, err
+	}
+	content := report.Content{Profile: p, Figures: figures, Values: values, Found: found, Effects: effects, Design: withDesign}
 	var page, book bytes.Buffer
 	if err := report.Compose(content).WriteHTML(&page, u); err != nil {
 		return nil, err

@@ -22,6 +22,7 @@ type Content struct {
 	Figures Figures
 	Values  []design.Stratum
 	Found   review.Findings
+	Effects []design.Effect
 	Design  bool // cautious and adopted values go in; without it the report keeps to what was measured and derived
 }
 
@@ -50,7 +51,7 @@ func Compose(c Content) *Document {
 	d.add("tests", "Preconsolidation tests", testBlocks(p, figures.Curves)...)
 	d.add("cone", "Cone soundings", ConeFactors(p.Boreholes...), ConeNotes(p.Boreholes...), Cone(p.Boreholes...))
 	d.add("compression", "Compressibility", Compression(p.Boreholes...))
-	d.add("findings", "Findings and decisions", findingBlocks(c.Found, s)...)
+	d.add("findings", "Findings and decisions", findingBlocks(c)...)
 	d.add("values", "Values per stratum", valueBlocks(c.Values, c.Design)...)
 	d.add("results", "Results as read", Results(s))
 	d.add("assumptions", "Assumptions and limitations", limitations(p)...)
@@ -202,15 +203,17 @@ func testBlocks(p *profile.Profile, curves []Figure) []Block {
 
 // findingBlocks are the report's section on results to doubt. The numbers are
 // those of the marks on the depth sheets.
-func findingBlocks(fs review.Findings, s *profile.Site) []Block {
+func findingBlocks(c Content) []Block {
+	fs, s := c.Found, c.Profile.Site
 	if len(fs) == 0 {
-		return []Block{Paragraph("No result was found that does not agree with the others, with the laws it must obey or with what is usual."), Decisions(s)}
+		return []Block{Paragraph("No result was found that does not agree with the others, with the laws it must obey or with what is usual."), Decisions(s), Effects(c.Effects)}
 	}
 	open := len(fs.Open())
 	return []Block{
 		Paragraph(fmt.Sprintf("%s, of which %d open. What was left out stays on the drawings and in the tables, with the reason.", counted(len(fs), "finding"), open)),
 		Findings(fs).Only("number", "severity", "borehole", "depth", "specimen", "quantity", "message", "causes", "action", "answer"),
 		Decisions(s),
+		Effects(c.Effects),
 	}
 }
 

@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"pastload/profile"
+	"pastload/profile/design"
 	"pastload/profile/review"
 )
 
@@ -115,4 +116,26 @@ func place(f *review.Finding) string {
 		parts = append(parts, f.Quantity)
 	}
 	return strings.Join(parts, ", ")
+}
+
+// Effects returns what each decision changes.
+func Effects(es []design.Effect) *Table {
+	t := &Table{
+		Name: "effects", Title: "With and without each decision",
+		Columns: []Column{
+			{"decision", "decision", Words, 0}, {"stratum", "stratum", Words, 0}, {"value", "what", Words, 0}, {"unit", "unit", Words, 0},
+			{"with it", "with", Pure, 3}, {"without it", "without", Pure, 3},
+		},
+	}
+	for _, e := range es {
+		d := dimensionOf(e.Unit)
+		cell := func(n profile.Number) Cell {
+			if !n.Known {
+				return Cell{}
+			}
+			return Q(n.Value, d, decimalsOf(d, n.Value))
+		}
+		t.Add(T(e.Label), T(orUnnamed(e.Stratum)), T(e.What), U(d), cell(e.With), cell(e.Without))
+	}
+	return t
 }
