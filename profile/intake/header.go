@@ -64,7 +64,7 @@ func splits(header string) []split {
 		}
 	}
 	if i := strings.LastIndexByte(h, ','); i > 0 && i+1 < len(h) {
-		out = append(out, split{h[:i], h[i+1:], false})
+		out = append(out, split{h[:i], strings.TrimSpace(h[i+1:]), false})
 	}
 	if name, ok := strings.CutSuffix(h, "%"); ok {
 		out = append(out, split{name, "%", false})
@@ -77,7 +77,7 @@ func splits(header string) []split {
 		out = append(out, split{strings.Join(parts[:i], "_"), strings.Join(parts[i:], "/"), false})
 	}
 	if i := strings.LastIndexByte(h, ' '); i > 0 {
-		out = append(out, split{h[:i], h[i+1:], false})
+		out = append(out, split{h[:i], strings.TrimSpace(h[i+1:]), false})
 	}
 	return out
 }
