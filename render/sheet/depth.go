@@ -46,10 +46,8 @@ func Depth(w io.Writer, in DepthInput) error {
 	if in.Page.Width == 0 {
 		in.Page = A4
 	}
-	if l := in.Settings.Limits; !(l.NormallyConsolidated > 0 && l.NormallyConsolidated < l.LightlyOverconsolidated &&
-		l.LightlyOverconsolidated < l.HeavilyOverconsolidated && finite(l.HeavilyOverconsolidated)) {
-		return fmt.Errorf("depth sheet: zone limits %g, %g and %g; want three rising ratios greater than zero",
-			l.NormallyConsolidated, l.LightlyOverconsolidated, l.HeavilyOverconsolidated)
+	if err := rising(in.Settings.Limits); err != nil {
+		return fmt.Errorf("depth sheet: %w", err)
 	}
 	id := in.ID
 	if id == "" {

@@ -154,7 +154,6 @@ func (d *depthSheet) measuredWater() int {
 // paragraphs are the definitions that a checker needs on the sheet itself, and
 // which tests to doubt.
 func (d *depthSheet) paragraphs() []string {
-	l := d.in.Settings.Limits
 	var out []string
 	if s := d.doubts(); s != "" {
 		out = append(out, s)
@@ -172,8 +171,7 @@ func (d *depthSheet) paragraphs() []string {
 		}
 	}
 	out = append(out,
-		fmt.Sprintf("Zones by OCR (project definition): underconsolidated (suspected) < %g ≤ normally consolidated < %g ≤ lightly overconsolidated < %g ≤ heavily overconsolidated.",
-			l.NormallyConsolidated, l.LightlyOverconsolidated, l.HeavilyOverconsolidated),
+		zoneDefinition(d.in.Settings.Limits),
 		symbols, "Water: "+d.waterCase())
 	if s := d.withoutRatio(); s != "" {
 		out = append(out, s)

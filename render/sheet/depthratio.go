@@ -9,6 +9,53 @@ import (
 	"pastload/render/draw"
 )
 
+// rising checks that limits part the zones.
+func rising(l profile.Limits) error {
+	if l.NormallyConsolidated > 0 && l.NormallyConsolidated < l.LightlyOverconsolidated &&
+		l.LightlyOverconsolidated < l.HeavilyOverconsolidated && finite(l.HeavilyOverconsolidated) {
+		return nil
+	}
+	return fmt.Errorf("zone limits %g, %g and %g; want three rising ratios greater than zero",
+		l.NormallyConsolidated, l.LightlyOverconsolidated, l.HeavilyOverconsolidated)
+}
+
+// zoneDefinition states the limits in words.
+func zoneDefinition(l profile.Limits) string {
+	return fmt.Sprintf("Zones by OCR (project definition): underconsolidated (suspected) < %g ≤ normally consolidated < %g ≤ lightly overconsolidated < %g ≤ heavily overconsolidated.",
+		l.NormallyConsolidated, l.LightlyOverconsolidated, l.HeavilyOverconsolidated)
+}
+
+// zoneTints tints a panel with an OCR axis by zone, with a line at each limit and
+// its value below, and a heavier line at 1.
+func zoneTints(c *draw.Canvas, box draw.Box, s axis.Scale, l profile.Limits, f draw.Font) {
+	zones := limits(l)
+	low, _ := s.Ends()
+	for i, z := range zones {
+		from, _ := s.Clamp(math.Max(z.from, low))
+		to := box.Right
+		if i+1 < len(zones) {
+			to, _ = s.Clamp(zones[i+1].from)
+		}
+		c.Rect(draw.Box{Left: from, Top: box.Top, Right: to, Bottom: box.Bottom}, draw.Pen{}, zoneTint(z.zone))
+	}
+	if x, way := s.Clamp(1); way == 0 {
+		c.Line(x, box.Top, x, box.Bottom, draw.Pen{Width: draw.Thick})
+	}
+	for i, z := range zones[1:] {
+		x, way := s.Clamp(z.from)
+		if way != 0 {
+			continue
+		}
+		c.Line(x, box.Top, x, box.Bottom+1, draw.Pen{Width: draw.Thin, Dash: draw.Dashed})
+		// The lowest two limits are close: their values stand on either side.
+		anchor := draw.Start
+		if i == 0 {
+			anchor = draw.End
+		}
+		c.Text(x, box.Bottom+3.6, draw.Text(fmt.Sprintf("%g", z.from)), anchored(f, anchor))
+	}
+}
+
 // limits returns where each zone begins, from low to high, with its name.
 func limits(l profile.Limits) []struct {
 	zone profile.Zone
@@ -48,30 +95,9 @@ func (d *depthSheet) ratioEnds() (float64, float64) {
 func (d *depthSheet) drawRatio(p *panel) {
 	low, high := d.ratioEnds()
 	s := axis.NewLog(low, high, p.box.Left, p.box.Right)
-	zones := limits(d.in.Settings.Limits)
-	for i, z := range zones {
-		from, _ := s.Clamp(math.Max(z.from, low))
-		to := p.box.Right
-		if i+1 < len(zones) {
-			to, _ = s.Clamp(zones[i+1].from)
-		}
-		d.c.Rect(draw.Box{Left: from, Top: p.box.Top, Right: to, Bottom: p.box.Bottom}, draw.Pen{}, zoneTint(z.zone))
-	}
+	zoneTints(d.c, p.box, s, d.in.Settings.Limits, d.f.small)
 	d.boundaries(p)
 	d.horizontal(p, s, axis.Decades{Named: []int{1, 2, 5}}, axis.Decades{Named: []int{1, 3}}, axis.Decades{Named: []int{1}})
-	d.c.Line(s.At(1), p.box.Top, s.At(1), p.box.Bottom, draw.Pen{Width: draw.Thick})
-	for i, z := range zones[1:] {
-		x, beyond := s.Clamp(z.from)
-		if beyond != 0 || !finite(z.from) || z.from <= 0 {
-			continue
-		}
-		d.c.Line(x, p.box.Top, x, p.box.Bottom+1, draw.Pen{Width: draw.Thin, Dash: draw.Dashed})
-		anchor := draw.Start
-		if i == 0 {
-			anchor = draw.End
-		}
-		d.c.Text(x, p.box.Bottom+3.6, draw.Text(fmt.Sprintf("%g", z.from)), anchored(d.f.small, anchor))
-	}
 	room := &placer{area: p.box.Inset(0.3)}
 	ocr := func(q *profile.Point) profile.Range {
 		if e, ok := value(q.Effective); ok && e <= 0 || q.OCR.Low <= 0 && q.OCR.Best <= 0 {

@@ -269,6 +269,7 @@ func TestSeriesToldApartWithoutColour(t *testing.T) {
 	sheets := map[string][]series{
 		"curve": append(append([]series(nil), branches[:]...), series{name: "virgin line", pen: virginPen}, series{name: "last points", pen: lastPen},
 			series{name: "field curve", pen: fieldPen}, series{name: "σ′v0", pen: inSituPen}, series{name: "σ′p", pen: yieldPen}),
+		"summary":       boreholeMarks,
 		"constructions": {{name: "a", pen: constructionPens["two-line"]}, {name: "b", pen: constructionPens["casagrande"]}, {name: "c", pen: constructionPens["slope"]}, {name: "d", pen: constructionPens["pacheco-silva"]}},
 		"depth":         append(append([]series(nil), grades...), totalLine, poreLine, effectiveLine, historyLine, designLine),
 	}

@@ -1,0 +1,315 @@
+package sheet
+
+import (
+	"fmt"
+	"math"
+
+	"pastload/profile"
+	"pastload/render/axis"
+	"pastload/render/draw"
+)
+
+// drawHeader writes the title of the sheet and of its panels.
+func (s *summarySheet) drawHeader() {
+	frame := s.in.Page.frame()
+	s.c.Text(frame.Left, frame.Top+4.6, draw.Text("Summary by stratum"), s.f.title)
+	s.c.Text(frame.Left, frame.Top+8.5, draw.Text(s.f.small.Fit(counted(len(s.in.Profiles), "borehole", "boreholes")+", tests and results by the name of their stratum", frame.Width())), s.f.small)
+	top := frame.Top + headerHeight
+	for _, p := range []struct {
+		box         draw.Box
+		title, unit draw.Label
+	}{
+		{s.names, draw.Text("Stratum"), draw.Text("and boreholes")},
+		{s.index, draw.Text("Index tests"), draw.Text("PL, LL, w (%)")},
+		{s.stress, draw.Text("Preconsolidation stress ").Join(sigmaP), draw.Text("(kPa, log scale)")},
+		{s.ratio, draw.Text("OCR = ").Join(sigmaP).Add(" / ").Join(sigmaV), draw.Text("(log scale)")},
+		{s.slope, draw.Text("C").Sub("c"), draw.Text("(–)")},
+	} {
+		title := p.title
+		if s.f.heading.Width(title) > p.box.Width()-2 {
+			title = sigmaP
+		}
+		s.c.Rect(draw.Box{Left: p.box.Left, Top: top, Right: p.box.Right, Bottom: p.box.Top}, draw.Pen{Width: draw.Medium}, draw.Fill{})
+		x := (p.box.Left + p.box.Right) / 2
+		s.c.Text(x, top+3.5, title, anchored(s.f.heading, draw.Middle))
+		s.c.Text(x, top+6.9, p.unit, anchored(s.f.small, draw.Middle))
+	}
+}
+
+// drawRows names strata and boreholes, and draws the lines between them.
+func (s *summarySheet) drawRows() {
+	low, high := s.ratioEnds()
+	zoneTints(s.c, s.ratio, axis.NewLog(low, high, s.ratio.Left, s.ratio.Right), s.in.Settings.Limits, s.f.small)
+	for i := range s.strata {
+		st := &s.strata[i]
+		lines := s.nameLines(st)
+		y := (st.box.Top+st.box.Bottom)/2 - float64(len(lines))*s.f.small.Line()/2
+		names := len(bold(s.f.small).Wrap(st.title(), 0.27*s.plot.Width()-s.boreholeWidth()-3, 3))
+		for k, l := range lines {
+			f := s.f.small
+			if k < names {
+				f = bold(f)
+			}
+			y += s.f.small.Line()
+			s.c.Text(s.names.Left+1, y-0.22*s.f.small.Line(), l, f)
+		}
+		for j, l := range st.lines {
+			s.nameLine(&l)
+			if j > 0 {
+				s.c.Line(s.names.Right-s.boreholeWidth()-1, l.top, s.plot.Right, l.top, draw.Pen{Colour: draw.Pale, Width: draw.Hair})
+			}
+		}
+		if i > 0 {
+			s.c.Line(s.plot.Left, st.box.Top, s.plot.Right, st.box.Top, draw.Pen{Width: draw.Medium})
+		}
+	}
+}
+
+// nameLine names the borehole of a line, with the depths it is drawn between
+// where there is room.
+func (s *summarySheet) nameLine(l *summaryLine) {
+	f := anchored(s.f.small, draw.End)
+	name := draw.Text(f.Fit(s.in.Profiles[l.borehole].Borehole, s.boreholeWidth()))
+	mid := l.top + l.pitch/2 + f.Height()/2
+	if l.pitch < 2.4*f.Line() {
+		s.c.Text(s.names.Right-1, mid, name, f)
+		return
+	}
+	depths := decimals(l.shallow, 1)
+	if l.deepest > l.shallow {
+		depths += "–" + decimals(l.deepest, 1)
+	}
+	s.c.Text(s.names.Right-1, mid-f.Line()/2, name, f)
+	s.c.Text(s.names.Right-1, mid+f.Line()/2, draw.Text(depths+" m"), coloured(f, "#444444"))
+}
+
+// each visits every line of every stratum.
+func (s *summarySheet) each(visit func(*summaryLine)) {
+	for i := range s.strata {
+		for j := range s.strata[i].lines {
+			visit(&s.strata[i].lines[j])
+		}
+	}
+}
+
+// drawPanels draws the data of the four panels over their axes.
+func (s *summarySheet) drawPanels() {
+	s.drawIndex()
+	s.drawStress()
+	s.drawRatio()
+	s.drawSlope()
+	for _, b := range []draw.Box{s.names, s.index, s.stress, s.ratio, s.slope} {
+		s.c.Rect(b, draw.Pen{Width: draw.Medium}, draw.Fill{})
+	}
+}
+
+func (s *summarySheet) drawIndex() {
+	top := 10.0
+	s.each(func(l *summaryLine) {
+		for _, r := range l.results {
+			if r.Result == nil {
+				continue
+			}
+			for _, n := range []profile.Number{r.Result.WaterContent, r.Result.LiquidLimit, r.Result.PlasticLimit} {
+				if v, ok := value(n); ok {
+					top = math.Max(top, v)
+				}
+			}
+		}
+	})
+	_, high, step := axis.Round(0, top, int(math.Max(3, s.index.Width()/9)))
+	scale := axis.NewLinear(0, high, s.index.Left, s.index.Right)
+	s.axisAt(s.index, scale, steps(step)...)
+	s.each(func(l *summaryLine) {
+		for _, r := range l.results {
+			if r.Result == nil {
+				continue
+			}
+			y := l.at(r.Depth)
+			var ends []float64
+			for _, n := range []profile.Number{r.Result.PlasticLimit, r.Result.LiquidLimit} {
+				if v, ok := value(n); ok {
+					x, _ := scale.Clamp(v)
+					s.c.Line(x, y-0.6, x, y+0.6, draw.Pen{Width: draw.Thin})
+					ends = append(ends, x)
+				}
+			}
+			if len(ends) == 2 {
+				s.c.Line(ends[0], y, ends[1], y, draw.Pen{Width: draw.Hair})
+			}
+			if v, ok := value(r.Result.WaterContent); ok {
+				x, _ := scale.Clamp(v)
+				s.c.Marker(x, y, boreholeMark(l.borehole))
+			}
+		}
+	})
+}
+
+func (s *summarySheet) drawStress() {
+	low, high := math.Inf(1), 0.0
+	s.each(func(l *summaryLine) {
+		for i := range l.tests {
+			v, _ := testValue(&l.tests[i])
+			low, high = math.Min(low, v), math.Max(high, v)
+		}
+	})
+	if high == 0 {
+		low, high = 10, 1000
+	}
+	low, high = axis.RoundLog(low*0.9, high*1.1)
+	scale := axis.NewLog(low, high, s.stress.Left, s.stress.Right)
+	s.axisAt(s.stress, scale, axis.Decades{Named: []int{1, 2, 5}}, axis.Decades{Named: []int{1, 3}}, axis.Decades{Named: []int{1}})
+	s.each(func(l *summaryLine) {
+		for i := range l.tests {
+			t := &l.tests[i]
+			v, _ := testValue(t)
+			r := profile.Single(v)
+			if known(t.Preconsolidation) && t.Bound == profile.Exact {
+				r = t.Preconsolidation
+			}
+			s.test(l, t, scale, r)
+		}
+	})
+}
+
+// test draws one test: a thin range, the shape of its borehole, and what is the
+// matter with it.
+func (s *summarySheet) test(l *summaryLine, t *profile.Test, scale axis.Scale, r profile.Range) {
+	x, _ := scale.Clamp(r.Best)
+	y := l.at(t.Depth)
+	if wide(r) {
+		x1, _ := scale.Clamp(r.Low)
+		x2, _ := scale.Clamp(r.High)
+		s.c.Line(x1, y, x2, y, draw.Pen{Colour: draw.Grey, Width: draw.Thin})
+	}
+	m := boreholeMark(l.borehole)
+	switch t.Bound {
+	case profile.AtLeast:
+		m.Shape = draw.ArrowRight
+	case profile.AtMost:
+		m.Shape = draw.ArrowLeft
+	}
+	s.c.Marker(x, y, m)
+	if leftOut(t) {
+		s.c.Marker(x, y, draw.Marker{Shape: draw.Cross, Size: 2.8})
+	}
+	if t.Verdict == profile.Conflicts {
+		s.c.Circle(x, y, 1.6, draw.Pen{Colour: draw.Red, Width: draw.Medium}, draw.Fill{})
+	}
+}
+
+// ratioEnds returns the ends of the OCR axis.
+func (s *summarySheet) ratioEnds() (float64, float64) {
+	low, high := 0.53, 9.5
+	s.each(func(l *summaryLine) {
+		for i := range l.tests {
+			if v, ok := testRatio(&l.tests[i]); ok {
+				low, high = math.Min(low, math.Max(v, 0.05)), math.Max(high, math.Min(v, 200))
+			}
+		}
+	})
+	return axis.RoundLog(low*0.95, high*1.05)
+}
+
+func (s *summarySheet) drawRatio() {
+	low, high := s.ratioEnds()
+	scale := axis.NewLog(low, high, s.ratio.Left, s.ratio.Right)
+	s.axisAt(s.ratio, scale, axis.Decades{Named: []int{1, 2, 5}}, axis.Decades{Named: []int{1, 3}}, axis.Decades{Named: []int{1}})
+	s.each(func(l *summaryLine) {
+		for i := range l.tests {
+			t := &l.tests[i]
+			v, ok := testRatio(t)
+			if !ok {
+				continue
+			}
+			r := profile.Single(v)
+			if known(t.Preconsolidation) && t.Bound == profile.Exact {
+				r = t.Preconsolidation.Scale(1 / t.Effective.Value)
+			}
+			s.test(l, t, scale, r)
+		}
+	})
+}
+
+func (s *summarySheet) drawSlope() {
+	top := 0.1
+	s.each(func(l *summaryLine) {
+		for _, r := range l.results {
+			if v, ok := value(r.MeasuredCc); ok {
+				top = math.Max(top, v)
+			}
+			if known(r.CorrelatedCc) {
+				top = math.Max(top, r.CorrelatedCc.Best)
+			}
+		}
+	})
+	_, high, step := axis.Round(0, top, int(math.Max(2, s.slope.Width()/8)))
+	scale := axis.NewLinear(0, high, s.slope.Left, s.slope.Right)
+	s.axisAt(s.slope, scale, steps(step)...)
+	s.each(func(l *summaryLine) {
+		for _, r := range l.results {
+			if known(r.CorrelatedCc) {
+				x, _ := scale.Clamp(r.CorrelatedCc.Best)
+				s.c.Marker(x, l.at(r.Depth), draw.Marker{Shape: draw.Tick, Colour: draw.Grey, Size: 1.8})
+			}
+			if v, ok := value(r.MeasuredCc); ok {
+				x, _ := scale.Clamp(v)
+				s.c.Marker(x, l.at(r.Depth), boreholeMark(l.borehole))
+			}
+		}
+	})
+}
+
+// key explains the shapes of the boreholes and the marks on tests.
+func (s *summarySheet) key() []keyItem {
+	var items []keyItem
+	for i := range s.in.Profiles {
+		if i == len(boreholeMarks)-1 && len(s.in.Profiles) > len(boreholeMarks) {
+			items = append(items, keyMarker(boreholeMark(i), draw.Text(fmt.Sprintf("%d further boreholes", len(s.in.Profiles)-i))))
+			break
+		}
+		items = append(items, keyMarker(boreholeMark(i), draw.Text(s.f.small.Fit(s.in.Profiles[i].Borehole, 40))))
+	}
+	seen := map[string]bool{}
+	s.each(func(l *summaryLine) {
+		for i := range l.tests {
+			t := &l.tests[i]
+			seen["out"] = seen["out"] || leftOut(t)
+			seen["conflict"] = seen["conflict"] || t.Verdict == profile.Conflicts
+			seen["bound"] = seen["bound"] || t.Bound != profile.Exact
+			seen["range"] = seen["range"] || wide(t.Preconsolidation)
+		}
+	})
+	if seen["range"] {
+		items = append(items, keyItem{5, func(c *draw.Canvas, x, y float64) {
+			c.Line(x-2.5, y, x+2.5, y, draw.Pen{Colour: draw.Grey, Width: draw.Thin})
+		}, draw.Text("range of a test")})
+	}
+	if seen["bound"] {
+		items = append(items, keyItem{4, func(c *draw.Canvas, x, y float64) { c.Marker(x-1.5, y, draw.Marker{Shape: draw.ArrowRight}) }, draw.Text("bound only")})
+	}
+	if seen["out"] {
+		items = append(items, keyMarker(draw.Marker{Shape: draw.Cross, Size: 2.8}, draw.Text("left out")))
+	}
+	if seen["conflict"] {
+		items = append(items, keyItem{4, func(c *draw.Canvas, x, y float64) {
+			c.Circle(x, y, 1.6, draw.Pen{Colour: draw.Red, Width: draw.Medium}, draw.Fill{})
+		}, draw.Text("conflicts with the rest")})
+	}
+	return items
+}
+
+// paragraphs define what the sheet shows.
+func (s *summarySheet) paragraphs() []string {
+	out := []string{
+		zoneDefinition(s.in.Settings.Limits),
+		"One line for each borehole in a stratum, with depth downwards between the depths given. Index tests: bar from plastic to liquid limit, shape water content. Cc: shapes measured, grey ticks from correlations. OCR in words: tests that are not left out and not bounds only.",
+	}
+	if s.without > 0 {
+		out = append(out, fmt.Sprintf("Strata without room on this sheet: %d.", s.without))
+	}
+	if s.in.Sources != "" {
+		out = append(out, "Data: "+s.in.Sources+".")
+	}
+	return out
+}
