@@ -18,7 +18,7 @@ var curveCases = []struct {
 	name string
 	make func() CurveInput
 }{
-	{"looped", looped}, {"stopped", stopped}, {"dense", dense}, {"few", few},
+	{"looped", looped}, {"stopped", stopped}, {"dense", dense}, {"few", few}, {"by hand", byHand},
 }
 
 func drawCurve(t testing.TB, in CurveInput) []byte {
@@ -84,6 +84,23 @@ func TestCurveSays(t *testing.T) {
 	}
 	if all = strings.Join(texts(t, drawCurve(t, few())), "\n"); !strings.Contains(all, "Not interpreted") || strings.Contains(all, "Grey band") {
 		t.Error("a curve that is not interpreted is to be drawn without a result")
+	}
+}
+
+func TestCurveHostileNames(t *testing.T) {
+	for _, hostile := range []string{`</text><script>"'&`, "a\x00\u202eb\xff", strings.Repeat("W", 10000)} {
+		in := byHand()
+		in.ID, in.Sources, in.Specimen.Name, in.Specimen.Borehole, in.Specimen.TestKind = hostile, hostile, hostile, hostile, hostile
+		in.Specimen.Notes, in.Specimen.Interpretation.Notes = []string{hostile}, []string{hostile}
+		in.Specimen.Interpretation.Reasons, in.Specimen.Interpretation.Grade = []string{hostile}, hostile
+		in.Specimen.Interpretation.Methods[0].Name = hostile
+		conforms(t, "hostile", drawCurve(t, in), A4)
+		sum := site(2)
+		sum.Profiles[0].Borehole, sum.ID, sum.Sources = hostile, hostile, hostile
+		for i := range sum.Profiles[0].Tests {
+			sum.Profiles[0].Tests[i].Stratum = hostile
+		}
+		conforms(t, "hostile", drawSummary(t, sum), A4)
 	}
 }
 

@@ -66,7 +66,7 @@ func TestDepthGolden(t *testing.T) {
 }
 
 func TestCurveGolden(t *testing.T) {
-	golden(t, "curve-looped", drawCurve(t, looped()))
+	golden(t, "curve", drawCurve(t, byHand()))
 }
 
 func TestDepthTwiceTheSame(t *testing.T) {
