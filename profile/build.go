@@ -21,7 +21,7 @@ func Build(site *Site, opt Options) (*Profile, error) {
 	if err != nil {
 		return nil, err
 	}
-	p := &Profile{Site: site}
+	p := &Profile{Site: site, Boreholes: []BoreholeProfile{}}
 	var problems Problems
 	if p.Specimens, problems = specimens(site, grounds); len(problems) > 0 {
 		return nil, problems.asError()
@@ -43,8 +43,7 @@ func Build(site *Site, opt Options) (*Profile, error) {
 		g.tellHistory(site, p, b, stations)
 		compressionIndex(g.borehole, b.Points, b.Results)
 		g.remark(b)
-		b.Assumptions = g.assumptions
-		b.Notes = append(b.Notes, g.notes...)
+		b.Assumptions = append(b.Assumptions, g.assumptions...)
 	}
 	return p, nil
 }
@@ -102,11 +101,12 @@ func (g *ground) profile(site *Site, specimens []Specimen) BoreholeProfile {
 	b := g.borehole
 	p := BoreholeProfile{
 		Borehole: b.Name, GroundLevel: b.GroundLevel, WaterTable: b.WaterTableDepth,
+		Points: []Point{}, Zones: []ZoneInterval{}, Strata: []StratumProfile{}, Assumptions: []Assumption{}, Notes: []string{},
 		Tests: g.tests(site, specimens), Results: g.derive(site),
 	}
 	for i := range b.Strata {
 		s := &b.Strata[i]
-		p.Strata = append(p.Strata, StratumProfile{Stratum: s.Name, Top: s.Top, Base: s.Base})
+		p.Strata = append(p.Strata, StratumProfile{Stratum: s.Name, Top: s.Top, Base: s.Base, Mechanisms: []Mechanism{}})
 	}
 	return p
 }

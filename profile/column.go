@@ -22,7 +22,6 @@ type ground struct {
 	given       []given        // the given effective stresses, by depth, where stress is nil
 	givenCOV    float64        // coefficient of variation of the given stresses
 	assumptions []Assumption
-	notes       []string
 }
 
 // given is an effective stress that the tables give.

@@ -80,6 +80,8 @@ type BoreholeProfile struct {
 	Strata      []StratumProfile `json:"strata"`
 	Results     []DerivedResult  `json:"results"`
 	Cone        *ConeProfile     `json:"cone,omitempty"`
+	NextTest    *NextTest        `json:"next_test,omitempty"`
+	Influence   string           `json:"most_influential_specimen,omitempty"` // the test that moves the line most
 	Assumptions []Assumption     `json:"assumptions"`
 	Notes       []string         `json:"notes"`
 }
@@ -163,6 +165,13 @@ type StratumProfile struct {
 	Base       float64     `json:"base_m"`
 	Mechanisms []Mechanism `json:"mechanisms"`
 	Sentence   string      `json:"sentence,omitempty"`
+}
+
+// A NextTest is where one more good oedometer test would narrow the band most.
+type NextTest struct {
+	Depth     float64 `json:"depth_m"`
+	Stratum   string  `json:"stratum"`
+	Narrowing float64 `json:"narrowing"` // share by which the mean width of the band falls
 }
 
 // A Mechanism is an explanation of the stress history of a stratum.

@@ -64,7 +64,7 @@ func specimens(site *Site, grounds []*ground) ([]Specimen, Problems) {
 	var problems Problems
 	for i := range site.Curves {
 		c := &site.Curves[i]
-		sp := Specimen{Name: c.Specimen, Borehole: c.Borehole, Depth: c.Depth, TestKind: c.TestKind, Grade: gradeNone, Curve: c}
+		sp := Specimen{Name: c.Specimen, Borehole: c.Borehole, Depth: c.Depth, TestKind: c.TestKind, Grade: gradeNone, Curve: c, Methods: []MethodValue{}, Reasons: []string{}, Notes: []string{}}
 		situation := situationOf(grounds, c)
 		if situation.EffectiveStress.Known {
 			sp.Effective = Known(situation.EffectiveStress.Value)
@@ -220,7 +220,8 @@ func (sp *Specimen) interpret(prepared oedometer.Curve, situation oedometer.Situ
 			sp.LoopRatio = Known(l.Ratio)
 		}
 	}
-	sp.Grade, sp.Reasons = in.Grade, in.Reasons
+	sp.Grade = in.Grade
+	sp.Reasons = append(sp.Reasons, in.Reasons...)
 	sp.Notes = append(sp.Notes, in.Notes...)
 }
 

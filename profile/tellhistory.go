@@ -57,6 +57,16 @@ func (g *ground) tellHistory(site *Site, p *Profile, b *BoreholeProfile, station
 			s.Mechanisms = append(s.Mechanisms, Mechanism{Name: m.Name, Probability: m.Probability, Parameter: Parameter(m.Parameter)})
 		}
 	}
+	if n := result.NextTest; n.Known {
+		b.NextTest = &NextTest{Depth: n.Depth, Stratum: g.borehole.Strata[n.Layer].Name, Narrowing: n.Narrowing}
+	}
+	if i := result.MostInfluential; i >= 0 {
+		t := &b.Tests[in.Tests[i].ID]
+		b.Influence = t.Specimen
+		if b.Influence == "" {
+			b.Influence = fmt.Sprintf("%.2f m", t.Depth)
+		}
+	}
 	b.Notes = append(b.Notes, result.Notes...)
 }
 

@@ -22,7 +22,7 @@ const sameDepth = 0.05
 // table reports and what the curves show, one Test for each specimen.
 func (g *ground) tests(site *Site, specimens []Specimen) []Test {
 	b := g.borehole
-	var tests []Test
+	tests := []Test{}
 	for i := range b.Results {
 		r := &b.Results[i]
 		if !r.Preconsolidation.Known {

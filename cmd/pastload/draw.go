@@ -1,6 +1,7 @@
 package main
 
 import (
+	"errors"
 	"fmt"
 	"io"
 	"strconv"
@@ -73,6 +74,7 @@ func paperSize(name string) (sheet.Page, error) {
 // the curve of each oedometer test.
 func drawAll(p *profile.Profile, found review.Findings, page sheet.Page) (report.Figures, error) {
 	var out report.Figures
+	var err error
 	names := make([]string, len(p.Boreholes))
 	for i := range p.Boreholes {
 		names[i] = p.Boreholes[i].Borehole
@@ -89,6 +91,48 @@ func drawAll(p *profile.Profile, found review.Findings, page sheet.Page) (report
 			return out, fmt.Errorf("the depth sheet of %s: %w", names[i], err)
 		}
 		out.Depth = append(out.Depth, report.Figure{ID: id, Caption: "Depth profile of " + names[i], SVG: svg, Large: page.Name == sheet.A3.Name})
+	}
+	if out.Curves, err = drawCurves(p); err != nil {
+		return out, err
+	}
+	out.Other, err = drawSummary(p)
+	return out, err
+}
+
+// drawSummary draws the site by strata, where it has anything to summarise.
+func drawSummary(p *profile.Profile) ([]report.Figure, error) {
+	in := sheet.SummaryInput{Profiles: p.Boreholes, Settings: p.Site.Settings, Page: sheet.A3, Sheet: 1, Of: 1, ID: "summary"}
+	svg, err := drawn(func(w io.Writer) error { return sheet.Summary(w, in) })
+	switch {
+	case errors.Is(err, sheet.ErrNoStrata):
+		return nil, nil
+	case err != nil:
+		return nil, fmt.Errorf("the stratum summary: %w", err)
+	}
+	return []report.Figure{{ID: in.ID, Caption: "All boreholes by stratum", SVG: svg, Large: true}}, nil
+}
+
+// drawCurves draws every oedometer test that has a curve to show.
+func drawCurves(p *profile.Profile) ([]report.Figure, error) {
+	names := make([]string, len(p.Specimens))
+	for i := range p.Specimens {
+		names[i] = p.Specimens[i].Name
+	}
+	var out []report.Figure
+	for i, name := range uniqueNames(names) {
+		id := "curve-" + name
+		in := sheet.CurveInput{
+			Specimen: p.Specimens[i], Settings: p.Site.Settings, Page: sheet.A4,
+			Figure: strconv.Itoa(len(p.Boreholes) + i + 1), Sheet: i + 1, Of: len(names), ID: id,
+		}
+		svg, err := drawn(func(w io.Writer) error { return sheet.Curve(w, in) })
+		if errors.Is(err, sheet.ErrNoCurve) {
+			continue
+		}
+		if err != nil {
+			return out, fmt.Errorf("the curve of %s: %w", names[i], err)
+		}
+		out = append(out, report.Figure{ID: id, Caption: "Compression curve of " + names[i], SVG: svg})
 	}
 	return out, nil
 }

@@ -41,14 +41,15 @@ func Compose(c Content) *Document {
 	for i := range figures.Depth {
 		d.add(figures.Depth[i].ID+"-drawing", figures.Depth[i].Caption, figures.Depth[i])
 	}
-	if len(figures.Other) > 0 {
-		d.add("overview", "The site on one sheet", blocks(figures.Other)...)
+	for i := range figures.Other {
+		d.add(figures.Other[i].ID+"-drawing", figures.Other[i].Caption, figures.Other[i])
 	}
 	for i := range p.Boreholes {
 		b := &p.Boreholes[i]
 		d.add(fmt.Sprintf("profile-%d", i+1), "Stress history with depth: "+b.Borehole, profileBlocks(b)...)
 	}
-	d.add("tests", "Preconsolidation tests", testBlocks(p, figures.Curves)...)
+	d.add("tests", "Preconsolidation tests", testBlocks(p)...)
+	d.add("curves", "Compression curves", blocks(figures.Curves)...)
 	d.add("cone", "Cone soundings", ConeFactors(p.Boreholes...), ConeNotes(p.Boreholes...), Cone(p.Boreholes...))
 	d.add("compression", "Compressibility", Compression(p.Boreholes...))
 	d.add("findings", "Findings and decisions", findingBlocks(c)...)
@@ -190,15 +191,15 @@ func likely(t *Table) *Table {
 	return &out
 }
 
-func testBlocks(p *profile.Profile, curves []Figure) []Block {
+func testBlocks(p *profile.Profile) []Block {
 	tests := Tests(p.Boreholes...)
 	out := []Block{
 		tests.Only("borehole", "depth", "specimen", "stratum", "effective_stress", "bound", "preconsolidation_stress", "preconsolidation_stress_low",
 			"preconsolidation_stress_high", "laboratory", "ocr", "grade", "expected", "expected_low", "expected_high", "z", "verdict"),
 		tests.Only("borehole", "depth", "specimen", "used", "why").Named("Which value is used, and why"),
 	}
-	out = append(out, Specimens(p.Specimens), Grades(p.Specimens), Methods(p.Specimens))
-	return append(out, blocks(curves)...)
+	// What each construction gives stands on the sheet of each curve.
+	return append(out, Specimens(p.Specimens), Grades(p.Specimens))
 }
 
 // findingBlocks are the report's section on results to doubt. The numbers are

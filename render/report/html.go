@@ -26,7 +26,8 @@ type htmlPage struct {
 }
 
 // htmlSection has a Class that chooses its paper: a section with a wide table
-// lies across the page, one that is a large drawing has an A3 page to itself.
+// lies across the page, one of drawings has pages of
+// their size to itself.
 type htmlSection struct {
 	ID, Number, Title, Class string
 	Blocks                   []htmlBlock
@@ -78,6 +79,8 @@ func (d *Document) WriteHTML(w io.Writer, u Units) error {
 			switch {
 			case hb.Figure != nil && hb.Figure.Large:
 				h.Class = "sheet"
+			case hb.Figure != nil:
+				h.Class = "leaf"
 			case hb.Table != nil && hb.Table.Wide && h.Class == "":
 				h.Class = "across"
 			}
