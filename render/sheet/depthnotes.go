@@ -158,7 +158,7 @@ func (d *depthSheet) paragraphs() []string {
 	if s := d.doubts(); s != "" {
 		out = append(out, s)
 	}
-	symbols := "σ′p: preconsolidation (yield) stress. OCR: overconsolidation ratio σ′p/σ′v0, heavier line at 1."
+	symbols := "Depth in m below ground. σ′p: preconsolidation (yield) stress. OCR: overconsolidation ratio σ′p/σ′v0, heavier line at 1."
 	if len(d.in.Profile.Zones) > 0 {
 		symbols += " P: probability."
 	}

@@ -3,6 +3,7 @@ package sheet
 import (
 	"fmt"
 	"math"
+	"sort"
 
 	"pastload/profile"
 	"pastload/render/axis"
@@ -72,21 +73,30 @@ func limits(l profile.Limits) []struct {
 	}
 }
 
-// ratioEnds returns the ends of the OCR axis: 0.5 to 10, and more where a best
-// value asks for it.
+// ratioEnds returns the ends of the OCR axis: 0.5 to 10, and more where a test or
+// most of the profile asks for it. Just below ground OCR grows without end as
+// σ′v0 vanishes: that stretch does not set the axis, the line leaves it there.
 func (d *depthSheet) ratioEnds() (float64, float64) {
+	const lightest = 5.0 // kPa
 	low, high := 0.53, 9.5
 	see := func(v float64, ok bool) {
 		if ok && finite(v) && v > 0 {
 			low, high = math.Min(low, math.Max(v, 0.05)), math.Max(high, math.Min(v, 200))
 		}
 	}
-	for i := range d.in.Profile.Points {
-		r := d.in.Profile.Points[i].OCR
-		see(r.Best, known(r))
-	}
 	for i := range d.in.Profile.Tests {
-		see(value(d.in.Profile.Tests[i].OCR))
+		see(testRatio(&d.in.Profile.Tests[i]))
+	}
+	var line []float64
+	for i := range d.in.Profile.Points {
+		q := &d.in.Profile.Points[i]
+		if e, ok := value(q.Effective); ok && e >= lightest && known(q.OCR) {
+			line = append(line, q.OCR.Best)
+		}
+	}
+	if sort.Float64s(line); len(line) > 0 {
+		see(line[0], true)
+		see(line[(len(line)-1)*19/20], true)
 	}
 	return axis.RoundLog(low*0.95, high*1.05)
 }
