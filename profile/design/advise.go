@@ -21,8 +21,8 @@ func (p *Parameter) advise(o Options, edition Edition, e evaluation) {
 		if edition.second {
 			p.Term = edition.Term + " (nominal, by judgement)"
 		}
-		p.MethodReason = fmt.Sprintf("%s too few for a formula: the range and the median are given, and a value is a matter of judgement and comparable experience.", values(p.N, "is", "are"))
-	case e.line != nil && e.line.Real():
+		p.MethodReason = fmt.Sprintf("%s too few for a formula: the range and the median are given, and a value is a matter of judgement and comparable experience.", sentence(values(p.N, "is", "are")))
+	case e.followed:
 		p.adviseLine(o, e)
 	case edition.means:
 		p.take(WayMeanLessSD, "Mean values go into design where the factors were calibrated to means; one standard deviation either side is for few or scattered data. The COV stands beside it.")

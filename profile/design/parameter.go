@@ -13,10 +13,12 @@ type Trend struct {
 	RobustSlope profile.Number `json:"robust_slope_per_m"` // Theil–Sen, of the quantity
 	P           float64        `json:"p"`                  // two-sided chance of such a slope where there is none
 	Real        bool           `json:"real"`
+	Change      profile.Number `json:"change"`      // over the tested depths, as a share of the value at their middle
+	Used        bool           `json:"used"`        // real, and a change of a tenth or more: the line is followed
 	SD          float64        `json:"residual_sd"` // about the line, of the logarithm where the line is in logarithms
 	From        float64        `json:"from_m"`
 	To          float64        `json:"to_m"`
-	Points      []TrendPoint   `json:"points,omitempty"` // where the trend is real
+	Points      []TrendPoint   `json:"points,omitempty"` // where the line is used
 	Line        DepthLine      `json:"-"`
 }
 
@@ -88,13 +90,14 @@ type evaluation struct {
 	q      *quantity
 	sample Sample
 	scaled Sample // on the working scale
-	flat   Sample // residuals where the trend is real, else scaled
-	// flatScale is the scale of flat: that of the line where the trend is real.
+	flat   Sample // residuals where the trend is followed, else scaled
+	// flatScale is the scale of flat: that of the line where it is followed.
 	flatScale Distribution
 	line      *DepthLine
 	scale     float64 // of fluctuation, m
 	count     float64 // effective
 	average   float64 // m
+	followed  bool    // the trend is real and great enough to use its line
 	forced    bool    // a log-normal quantity with a value of zero or less
 }
 
@@ -118,7 +121,7 @@ func (o Options) evaluate(q *quantity, s Sample) evaluation {
 	e.flatScale = e.Distribution
 	if line, err := FitTrend(s, e.Distribution); err == nil {
 		e.line = &line
-		if line.Real() {
+		if e.followed = line.Real() && line.change() >= noticeable; e.followed {
 			e.flatScale = line.Distribution
 			if e.flatScale == Normal {
 				e.flat = s
@@ -204,8 +207,11 @@ func (e *evaluation) lines() []Alternative {
 			continue
 		}
 		a := e.alternative(w.id, w.name+", at "+metres(depth), w.estimate, i, w.source, w.mark)
-		if !l.Real() {
+		switch {
+		case !l.Real():
 			a.Note = "the slope is not real: a constant is used"
+		case !e.followed:
+			a.Note = "the change with depth is too small to matter: a constant is used"
 		}
 		out = append(out, a)
 	}
@@ -216,14 +222,17 @@ func (e *evaluation) lines() []Alternative {
 func (e *evaluation) trend() *Trend {
 	l := *e.line
 	middle := l.From + (l.To-l.From)/2
-	t := &Trend{Slope: l.SlopeAt(middle), P: l.P, Real: l.Real(), SD: l.SD, From: l.From, To: l.To, Line: l}
+	t := &Trend{Slope: l.SlopeAt(middle), P: l.P, Real: l.Real(), Used: e.followed, SD: l.SD, From: l.From, To: l.To, Line: l}
 	if l.Distribution == LogNormal {
 		t.LogSlope = profile.Known(l.Slope)
 	}
 	if slope, _, err := TheilSen(e.sample); err == nil {
 		t.RobustSlope = profile.Known(slope)
 	}
-	if !t.Real {
+	if c := l.change(); c <= math.MaxFloat64 {
+		t.Change = profile.Known(c)
+	}
+	if !t.Used {
 		return t
 	}
 	for _, z := range depthsBetween(l.From, l.To) {

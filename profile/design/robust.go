@@ -158,7 +158,7 @@ const (
 )
 
 // Looks returns the values of a sample that lie far from the others by Grubbs'
-// test (one value at most) or by the modified z-score |x − median|/RobustSD.
+// test (one value at most) or else by the modified z-score |x − median|/RobustSD.
 // Give it residuals where the quantity changes with depth.
 func Looks(s Sample) []Look {
 	if s.check() != nil {
@@ -181,7 +181,7 @@ func Looks(s Sample) []Look {
 	if sd, err := RobustSD(s); err == nil && len(s) >= modifiedZLeast && sd > 0 {
 		middle := median(s.values())
 		for _, o := range s {
-			if z := math.Abs(o.Value-middle) / sd; z > modifiedZLimit {
+			if z := math.Abs(o.Value-middle) / sd; z > modifiedZLimit && (len(looks) == 0 || looks[0].Observation != o) {
 				looks = append(looks, Look{o, "modified z", z, modifiedZLimit})
 			}
 		}

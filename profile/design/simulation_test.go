@@ -172,29 +172,30 @@ func TestAdvisedLow(t *testing.T) {
 		{15, 0.25, 0.065},
 	} {
 		r := rand.New(rand.NewSource(int64(1000*c.size) + int64(100*c.cov)))
-		unsafe := 0
+		unsafe, lines := 0, 0
 		sigma := LogNormal.spread(0, c.cov)
 		for range n {
 			s := draw(r, c.size, math.Log(2), sigma)
 			for i := range s {
 				s[i].Value = math.Exp(s[i].Value)
 			}
-			sum, err := Summarize(s)
+			var readings []reading
+			for _, o := range s {
+				readings = append(readings, reading{Observation: o})
+			}
+			p, err := Options{}.parameter(&ocrQuantity, Edition{}, nil, readings)
 			if err != nil {
 				t.Fatal(err)
 			}
-			e := Options{}.evaluate(&ocrQuantity, s)
-			id, _ := e.constantWay(Mean, float64(c.size), sum.COV)
-			i, err := WayByID(id).Of(s, e.Assumptions)
-			if err != nil {
-				t.Fatal(err)
-			}
-			if i.Low > 2 {
+			if p.Low.Value > 2 {
 				unsafe++
+			}
+			if p.Trend.Used {
+				lines++
 			}
 		}
 		rate := float64(unsafe) / float64(n)
-		t.Logf("OCR, n = %d, true COV %.2f: advised low above the true median in %.3f", c.size, c.cov, rate)
+		t.Logf("OCR, n = %d, true COV %.2f: advised low above the true median in %.3f; a line followed in %.3f", c.size, c.cov, rate, float64(lines)/float64(n))
 		if rate > c.most {
 			t.Errorf("n = %d, COV %.2f: unsafe in %.3f; want at most %.3f", c.size, c.cov, rate, c.most)
 		}

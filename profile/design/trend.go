@@ -139,6 +139,13 @@ func (l DepthLine) SlopeAt(depth float64) float64 {
 	return l.Slope
 }
 
+// change returns how much the line changes over the tested depths, as a share of
+// its value at their middle; infinite where that is zero.
+func (l DepthLine) change() float64 {
+	middle := l.From + (l.To-l.From)/2
+	return math.Abs((l.At(l.To) - l.At(l.From)) / l.At(middle))
+}
+
 // Band returns the cautious low and high line at a depth (Frank et al. 2004,
 // formula from memory, unverified; standard regression theory):
 //

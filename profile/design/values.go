@@ -35,7 +35,7 @@ type Stratum struct {
 }
 
 // A Parameter is what is known of one quantity in a stratum. Low and High are
-// what the advised way gives; where a trend is real they are those of its line
+// what the advised way gives; where a trend is followed they are those of its line
 // at the middle of the tested depths, and Trend.Points has the rest.
 type Parameter struct {
 	Parameter string `json:"parameter"`
@@ -187,12 +187,12 @@ func (o Options) stratum(site *profile.Site, name, scope string, boreholes []str
 // POP, which follow the ground and not a ruler, would describe it with one value.
 func (s *Stratum) relateHistory() {
 	stress := s.parameter("preconsolidation stress")
-	if stress == nil || stress.Trend == nil || !stress.Trend.Real {
+	if stress == nil || stress.Trend == nil || !stress.Trend.Used {
 		return
 	}
 	var steady []string
 	for _, name := range []string{"OCR", "POP"} {
-		if p := s.parameter(name); p != nil && p.Trend != nil && !p.Trend.Real {
+		if p := s.parameter(name); p != nil && p.Trend != nil && !p.Trend.Used {
 			steady = append(steady, name)
 		}
 	}

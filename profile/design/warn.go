@@ -11,7 +11,7 @@ const (
 	dependence  = 0.05 // change of a cautious value, over the mean, that correlated values make
 	manyLeftOut = 0.34 // of all results
 	surelyWorse = 0.05 // chance of a weak zone or borehole by luck, all places tried allowed for
-	noticeable  = 0.1  // difference of a zone or borehole over the mean
+	noticeable  = 0.1  // difference of a zone or borehole, or change with depth, over the mean
 )
 
 // fact warns of something in what was measured.
@@ -66,7 +66,7 @@ func (p *Parameter) warnUnsafe(e evaluation) {
 	case e.q.unsafe == "":
 	case p.N < fewValues:
 		p.caution("For %s a low value is on the unsafe side: the greatest result is %s.", e.q.unsafe, quantityText(p.Max.Value, p.Unit))
-	case e.trendReal() && p.High.Known:
+	case e.followed && p.High.Known:
 		p.caution("For %s a low value is on the unsafe side: use the high line, %s at %s.", e.q.unsafe, quantityText(p.High.Value, p.Unit), metres(p.middle()))
 	case p.High.Known:
 		p.caution("For %s a low value is on the unsafe side: use the high one, %s.", e.q.unsafe, quantityText(p.High.Value, p.Unit))
@@ -75,10 +75,10 @@ func (p *Parameter) warnUnsafe(e evaluation) {
 
 // warnScatter warns of scatter that is too great, too small, or not independent.
 func (p *Parameter) warnScatter(e evaluation) {
-	if p.N >= fewValues && e.q.cov > 0 && p.COV.Known && p.COV.Value > muchScatter*e.q.cov && !e.trendReal() {
+	if p.N >= fewValues && e.q.cov > 0 && p.COV.Known && p.COV.Value > muchScatter*e.q.cov && !e.followed {
 		p.fact("The scatter (COV %s) is well above what is usual (%s): two kinds of ground, or two kinds of test, may be mixed.", rough(p.COV.Value), rough(e.q.cov))
 	}
-	if p.N > 1 && p.SD.Known && p.SD.Value == 0 {
+	if p.N >= fewValues && p.SD.Known && p.SD.Value == 0 {
 		p.fact("All %d values are equal: formulas from their scatter give no margin, which the ground does not promise.", p.N)
 	}
 }
@@ -102,7 +102,11 @@ func (p *Parameter) warnDependence(o Options, e evaluation) {
 	case err != nil:
 		p.caution("%s: too few for the formula to hold.", text)
 	case math.Max(p.Low.Value-i.Low, i.High-p.High.Value) > dependence*p.Mean.Value && p.Low.Known && p.High.Known:
-		p.caution("%s: counted so, low and high would be %s and %s.", text, number(i.Low), quantityText(i.High, p.Unit))
+		low := "none above zero"
+		if n := e.number(i.Low); n.Known {
+			low = quantityText(n.Value, p.Unit)
+		}
+		p.caution("%s: counted so, the low value would be %s and the high one %s.", text, low, quantityText(i.High, p.Unit))
 	}
 }
 
@@ -132,17 +136,15 @@ func (e *evaluation) apart(d float64) string {
 
 // afterTrend says that differences are taken from the line.
 func (e *evaluation) afterTrend() string {
-	if e.trendReal() {
+	if e.followed {
 		return ", the trend with depth taken off"
 	}
 	return ""
 }
 
-func (e *evaluation) trendReal() bool { return e.line != nil && e.line.Real() }
-
 // warnTrend warns that one value hides a change with depth.
 func (p *Parameter) warnTrend(e evaluation) {
-	if !e.trendReal() {
+	if !e.followed {
 		return
 	}
 	verb := "rises"
