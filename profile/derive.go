@@ -89,7 +89,7 @@ func (d *DerivedResult) correlate(site *Site, v correlate.Values, organic bool) 
 		d.Correlations = append(d.Correlations, Correlated{
 			ID: m.Correlation.ID, Quantity: string(m.Correlation.Quantity), Family: m.Correlation.Family,
 			Value: m.Estimate.Value, Unit: m.Correlation.Quantity.Unit(),
-			Verified: m.Correlation.Verified.String(), Warnings: m.Estimate.Warnings,
+			Verified: m.Correlation.Verified.String(), Warnings: m.Estimate.Warnings, Counts: m.Speaks,
 		})
 	}
 }

@@ -174,7 +174,7 @@ func (s source) reading(v correlate.Values, d *DerivedResult) (history.Reading, 
 	}
 	d.Correlations = append(d.Correlations, Correlated{
 		ID: c.ID, Quantity: string(correlate.PreconsolidationStress), Family: c.Family, Value: stress, Unit: "kPa",
-		Verified: c.Verified.String(), Warnings: e.Warnings,
+		Verified: c.Verified.String(), Warnings: e.Warnings, Counts: true,
 	})
 	return history.Reading{
 		Source: s.name, Depth: d.Depth, EffectiveStress: d.Effective.Value, Preconsolidation: stress,

@@ -216,6 +216,7 @@ type Correlated struct {
 	Value    float64  `json:"value"`
 	Unit     string   `json:"unit"`
 	Verified string   `json:"verified"` // the verification mark in words
+	Counts   bool     `json:"counts"`   // it speaks for its family in the band
 	Warnings []string `json:"warnings,omitempty"`
 }
 

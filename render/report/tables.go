@@ -196,7 +196,7 @@ func Compression(bs ...profile.BoreholeProfile) *Table {
 			{"high", "correlated_high", Pure, 2},
 			{"correlations", "correlations", Words, 0},
 		},
-		Note: "Correlated values rest on the relations named; see the catalogue for their soil, range and how far their coefficients were verified.",
+		Note: "Correlated values rest on the relations named, one for each family that rests on data or assumptions of its own; see the catalogue for their soil, range and how far their coefficients were verified.",
 	}
 	for _, b := range bs {
 		for _, d := range b.Results {
@@ -213,7 +213,7 @@ func Compression(bs ...profile.BoreholeProfile) *Table {
 func correlationIDs(d profile.DerivedResult) string {
 	var ids []string
 	for _, c := range d.Correlations {
-		if c.Quantity == "compression index" {
+		if c.Quantity == "compression index" && c.Counts {
 			ids = append(ids, c.ID)
 		}
 	}
