@@ -1,108 +1,16 @@
 package history
 
 import (
-	"errors"
 	"fmt"
 	"math"
 )
 
-// ErrInput is wrapped by the errors that Infer returns.
-var ErrInput = errors.New("stress history: unusable input")
-
-// Infer returns the stress history that the evidence supports.
+// Infer returns the stress history that the evidence supports. Equal input
+// gives equal bytes. The error wraps ErrInput where a number is not finite, a
+// preconsolidation stress is not above zero or a layer is not in the list.
+// Where there is little evidence the answer is wide and Notes say why; no
+// number in it is NaN or infinite.
 func Infer(in Input) (*Result, error) { return infer(in, &standard) }
-
-// defaults fills what the caller left out.
-func (in *Input) defaults() {
-	if in.Limits == [3]float64{} {
-		in.Limits = [3]float64{0.85, 1.2, 4}
-	}
-	if in.WaterUnitWeight == 0 {
-		in.WaterUnitWeight = 9.81
-	}
-	if in.BuoyantUnitWeight == 0 {
-		in.BuoyantUnitWeight = 8
-	}
-	if in.NeighbourBetweenSD == 0 {
-		in.NeighbourBetweenSD = 0.2
-	}
-}
-
-// finite tells whether all values are numbers within reason.
-func finite(values ...float64) bool {
-	for _, v := range values {
-		if math.IsNaN(v) || math.Abs(v) > 1e9 {
-			return false
-		}
-	}
-	return true
-}
-
-// check returns an error for input that no answer can rest on.
-func (in *Input) check() error {
-	bad := func(format string, args ...any) error {
-		return fmt.Errorf("%w: %s", ErrInput, fmt.Sprintf(format, args...))
-	}
-	if len(in.Layers) == 0 {
-		return bad("no layer; want at least one")
-	}
-	for i, l := range in.Layers {
-		if !finite(l.Top, l.Base) || l.Base < l.Top {
-			return bad("layer %d: top %g, base %g m; want a base below the top", i, l.Top, l.Base)
-		}
-	}
-	tests := func(what string, ts []Test) error {
-		for i, t := range ts {
-			if !finite(t.Depth, t.EffectiveStress, t.Preconsolidation, t.LnSD, t.Disturbance) ||
-				t.Preconsolidation <= 0 || t.LnSD < 0 || t.Disturbance < 0 || t.Layer < 0 || t.Layer >= len(in.Layers) {
-				return bad("%s %d at %g m: σ′p %g kPa, sd %g, layer %d; want finite numbers, σ′p above zero and a layer of the list",
-					what, i, t.Depth, t.Preconsolidation, t.LnSD, t.Layer)
-			}
-		}
-		return nil
-	}
-	if err := tests("test", in.Tests); err != nil {
-		return err
-	}
-	if err := tests("neighbouring test", in.Neighbours); err != nil {
-		return err
-	}
-	for i, r := range in.Readings {
-		if !finite(r.Depth, r.EffectiveStress, r.Preconsolidation, r.BetweenSD, r.WithinSD) || r.Preconsolidation <= 0 ||
-			r.BetweenSD < 0 || r.WithinSD < 0 || r.Layer < 0 || r.Layer >= len(in.Layers) {
-			return bad("reading %d (%s) at %g m: σ′p %g kPa, layer %d; want finite numbers, σ′p above zero and a layer of the list",
-				i, r.Source, r.Depth, r.Preconsolidation, r.Layer)
-		}
-	}
-	for i, s := range in.Stations {
-		if !finite(s.Depth, s.EffectiveStress, s.LnSD) || s.LnSD < 0 || s.Layer < 0 || s.Layer >= len(in.Layers) {
-			return bad("station %d at %g m: σ′v0 %g kPa, sd %g, layer %d; want finite numbers and a layer of the list",
-				i, s.Depth, s.EffectiveStress, s.LnSD, s.Layer)
-		}
-	}
-	for i, k := range in.Known {
-		if !finite(k.Size, k.SD) || k.SD < 0 || k.Layer < -1 || k.Layer >= len(in.Layers) {
-			return bad("known fact %d (%s): size %g, sd %g, layer %d; want finite numbers and a layer of the list", i, k.Kind, k.Size, k.SD, k.Layer)
-		}
-		if k.Kind != RemovedGround && k.Kind != FormerWaterLevel {
-			return bad("known fact %d: kind %q; want %q or %q", i, k.Kind, RemovedGround, FormerWaterLevel)
-		}
-	}
-	for _, v := range in.Limits {
-		if !finite(v) || v <= 0 {
-			return bad("limits of OCR %v; want three numbers above zero", in.Limits)
-		}
-	}
-	if in.Limits[0] >= in.Limits[1] || in.Limits[1] >= in.Limits[2] {
-		return bad("limits of OCR %v; want them to rise", in.Limits)
-	}
-	if !finite(in.WaterTable, in.WaterUnitWeight, in.BuoyantUnitWeight, in.NeighbourBetweenSD) ||
-		in.WaterUnitWeight <= 0 || in.BuoyantUnitWeight <= 0 || in.NeighbourBetweenSD < 0 {
-		return bad("water table %g m, unit weights %g and %g kN/m³; want finite numbers, weights above zero",
-			in.WaterTable, in.WaterUnitWeight, in.BuoyantUnitWeight)
-	}
-	return nil
-}
 
 func infer(in Input, k *constants) (*Result, error) {
 	in.defaults()
@@ -114,13 +22,174 @@ func infer(in Input, k *constants) (*Result, error) {
 		Tests:           make([]TestResult, len(in.Tests)),
 		MostInfluential: -1,
 	}
-	for l := range in.Layers {
-		in.layer(l, k, out)
+	layers := make([]*layer, len(in.Layers))
+	for i := range in.Layers {
+		layers[i] = in.gather(i)
+	}
+	calibrate(layers, k)
+	for _, l := range layers {
+		if err := l.infer(k); err != nil {
+			return nil, err
+		}
+		l.tell(out)
 	}
 	for i, t := range out.Tests {
 		if t.Used && (out.MostInfluential < 0 || t.Influence > out.Tests[out.MostInfluential].Influence) {
 			out.MostInfluential = i
 		}
 	}
+	out.NextTest = nextTest(layers)
 	return out, nil
+}
+
+// layer is the work on one stratum.
+type layer struct {
+	in       *Input
+	index    int
+	ground   ground
+	tests    []int // exact tests, index in Input.Tests
+	bounds   []int // the others
+	near     []int // exact tests of neighbours, index in Input.Neighbours
+	stations []int // index in Input.Stations
+	sources  []source
+	readings []float64 // different depths of the readings
+	stress   map[float64]float64
+	mended   []mendedStress
+	// What the plausible effective stresses are, by depth.
+	goodDepth, goodStress []float64
+	sites                 []site // one for each bound
+	rows                  *rows
+	model                 *model
+	post                  *posterior
+	lines                 []mixture // ln σ′p at the outputs: stations, tests, bounds, readings
+}
+
+// gather sorts the evidence of a layer.
+func (in *Input) gather(index int) *layer {
+	l := &layer{in: in, index: index, sources: in.sourcesOf(index)}
+	for i, t := range in.Tests {
+		switch {
+		case t.Layer != index:
+		case t.Kind == Exact:
+			l.tests = append(l.tests, i)
+		default:
+			l.bounds = append(l.bounds, i)
+		}
+	}
+	for i, t := range in.Neighbours {
+		if t.Layer == index && t.Kind == Exact {
+			l.near = append(l.near, i)
+		}
+	}
+	for i, s := range in.Stations {
+		if s.Layer == index {
+			l.stations = append(l.stations, i)
+		}
+	}
+	l.readings = readingDepths(l.sources)
+	l.sites = make([]site, len(l.bounds))
+	l.mend()
+	l.ground = ground{top: in.Layers[index].Top, base: in.Layers[index].Base, gamma: in.WaterUnitWeight, buoyant: in.BuoyantUnitWeight}
+	for _, z := range l.outputs() {
+		l.ground.base = math.Max(l.ground.base, z)
+		l.ground.top = math.Min(l.ground.top, z)
+	}
+	l.ground.base = math.Max(l.ground.base, l.ground.top+0.1)
+	if in.HasWater {
+		l.ground.water = in.WaterTable
+	}
+	return l
+}
+
+// outputs returns the depths at which ln σ′p is computed.
+func (l *layer) outputs() []float64 {
+	var z []float64
+	for _, i := range l.stations {
+		z = append(z, l.in.Stations[i].Depth)
+	}
+	for _, i := range append(append([]int(nil), l.tests...), l.bounds...) {
+		z = append(z, l.in.Tests[i].Depth)
+	}
+	return append(z, l.readings...)
+}
+
+// infer computes the posterior of the layer. Bounds need three rounds: without
+// them, then with what each one adds to the others.
+func (l *layer) infer(k *constants) error {
+	rounds := 1
+	if len(l.bounds) > 0 {
+		rounds = 3
+	}
+	for round := range rounds {
+		l.rows = l.buildRows(k, true)
+		depth := append([]float64(nil), l.rows.depth...)
+		effective := append([]float64(nil), l.rows.effective...)
+		for _, z := range l.outputs() {
+			depth = append(depth, z)
+		}
+		for _, i := range l.stations {
+			effective = append(effective, l.mendedAt(l.in.Stations[i].Depth, l.in.Stations[i].EffectiveStress))
+		}
+		for len(effective) < len(depth) {
+			effective = append(effective, l.stress[depth[len(effective)]])
+		}
+		l.model = newModel(k, l.in.mechanismsFor(l), &l.ground, depth, effective)
+		l.post = l.model.infer(l.rows)
+		if l.post == nil {
+			return fmt.Errorf("%w: %s: the evidence is too singular to be averaged", ErrInput, l.name())
+		}
+		l.lines = l.post.predict(l.outputs())
+		if round < rounds-1 {
+			l.updateBounds(k)
+		}
+	}
+	return nil
+}
+
+// buildRows writes the rows of the layer, with or without indirect evidence.
+func (l *layer) buildRows(k *constants, indirect bool) *rows {
+	r := &rows{tests: len(l.tests)}
+	for _, i := range l.tests {
+		t := l.in.Tests[i]
+		value, sd := t.observation()
+		r.add(t.Depth, l.stress[t.Depth], value, sd, 0, 0)
+	}
+	for _, i := range l.near {
+		t := l.in.Neighbours[i]
+		value, sd := t.observation()
+		r.add(t.Depth, t.EffectiveStress, value, sd, 0, l.in.NeighbourBetweenSD)
+	}
+	for b, s := range l.sites {
+		if s.variance > 0 {
+			z := l.in.Tests[l.bounds[b]].Depth
+			r.add(z, l.stress[z], s.mean, 0, s.variance, 0)
+		}
+	}
+	if !indirect || len(l.sources) == 0 {
+		return r
+	}
+	for _, t := range k.Trusts {
+		if ind, ok := k.combineSources(l.sources, l.readings, t); ok {
+			r.indirect = append(r.indirect, ind)
+		}
+	}
+	if len(r.indirect) < len(k.Trusts) {
+		r.indirect = nil
+		return r
+	}
+	for _, z := range l.readings {
+		r.add(z, l.stress[z], 0, 0, 0, 0)
+	}
+	return r
+}
+
+// observation returns ln σ′p as the test tells it and its sd. What disturbance
+// may have taken away is half-normal: it enters by its mean and variance.
+func (t *Test) observation() (value, sd float64) {
+	sd = t.LnSD
+	if sd == 0 {
+		sd = LnSDForGrade("")
+	}
+	mean := math.Sqrt(2 / math.Pi)
+	return math.Log(t.Preconsolidation) + mean*t.Disturbance, math.Hypot(sd, math.Sqrt(1-mean*mean)*t.Disturbance)
 }

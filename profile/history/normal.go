@@ -21,6 +21,38 @@ func (m *mixture) add(w, mean, sd float64) {
 	m.sd = append(m.sd, sd)
 }
 
+// shifted returns the mixture of the value plus d with an independent normal
+// error.
+func (m *mixture) shifted(d, sd float64) mixture {
+	out := mixture{weight: m.weight, mean: make([]float64, len(m.mean)), sd: make([]float64, len(m.sd))}
+	for i := range m.mean {
+		out.mean[i] = m.mean[i] + d
+		out.sd[i] = math.Hypot(m.sd[i], sd)
+	}
+	return out
+}
+
+// trim drops what weighs less than a share of the whole and makes the rest add
+// to one.
+func (m *mixture) trim(share float64) {
+	total := 0.0
+	for _, w := range m.weight {
+		total += w
+	}
+	kept, n := 0.0, 0
+	for i, w := range m.weight {
+		if w >= share*total && w > 0 {
+			m.weight[n], m.mean[n], m.sd[n] = w, m.mean[i], m.sd[i]
+			kept += w
+			n++
+		}
+	}
+	m.weight, m.mean, m.sd = m.weight[:n], m.mean[:n], m.sd[:n]
+	for i := range m.weight {
+		m.weight[i] /= kept
+	}
+}
+
 // below returns the probability of a value below x.
 func (m *mixture) below(x float64) float64 {
 	p := 0.0
@@ -75,19 +107,3 @@ func (m *mixture) at(p float64) float64 {
 
 // band returns the 5, 50 and 95 % points.
 func (m *mixture) band() Band { return Band{m.at(0.05), m.at(0.50), m.at(0.95)} }
-
-// logNormal returns the log density of a normal distribution.
-func logNormal(d, variance float64) float64 {
-	return -0.5*d*d/variance - 0.5*math.Log(2*math.Pi*variance)
-}
-
-// addLog returns ln(e^a + e^b).
-func addLog(a, b float64) float64 {
-	if a < b {
-		a, b = b, a
-	}
-	if math.IsInf(b, -1) {
-		return a
-	}
-	return a + math.Log1p(math.Exp(b-a))
-}

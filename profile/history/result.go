@@ -15,7 +15,7 @@ type Point struct {
 	HasOCR           bool // false where σ′v0 is zero or less
 	OCR              Band
 	POP              Band // kPa
-	Zone             Zone // the most probable
+	Zone             Zone // of OCR.Best
 	ZoneProbability  [4]float64
 	LnSD             float64 // standard deviation of ln σ′p
 }
@@ -43,6 +43,7 @@ type TestResult struct {
 	ID        int
 	Expected  Band    // of another good test at its depth, kPa, leaving this one out
 	Z         float64 // normal score of the value in that distribution
+	Judged    float64 // distance from Expected.Best in the standard deviations that the verdict rests on
 	Wild      float64 // probability that the test is not a good one
 	Verdict   string  // "" for a test that was not used
 	Influence float64 // largest shift of the line that this test causes, in ln σ′p

@@ -1,0 +1,107 @@
+package history
+
+import (
+	"math"
+
+	"gonum.org/v1/gonum/mat"
+)
+
+// combination is one node under one setting with every test taken as good: a
+// normal model whose mean is the node's line and whose parameters vary within
+// their cells. C = K + J·Jᵀ has the departure and the errors in K and the
+// slopes in J; its inverse is P − (PJ)(I + JᵀPJ)⁻¹(PJ)ᵀ with P = K⁻¹.
+type combination struct {
+	residual  []float64   // value less line
+	alpha     []float64   // C⁻¹·residual
+	pj        []float64   // n×p: P·J
+	inner     []float64   // p×p: (I + JᵀPJ)⁻¹, the covariance of the parameters in sd of their cells
+	step      []float64   // p: their mean
+	slope     [][]float64 // J by parameter, then row
+	precision []float64   // t×t: C⁻¹ among the tests
+	log       float64     // log likelihood
+}
+
+// combine computes a combination.
+func (r *rows) combine(sv *solved, ln *line) combination {
+	n, p := len(r.depth), len(ln.slope)
+	store := make([]float64, 2*n+n*p+r.tests*r.tests+p)
+	cut := func(n int) []float64 {
+		part := store[:n:n]
+		store = store[n:]
+		return part
+	}
+	c := combination{residual: cut(n), alpha: cut(n), pj: cut(n * p), precision: cut(r.tests * r.tests), step: cut(p), slope: ln.slope}
+	for i := range n {
+		c.residual[i] = sv.value[i] - ln.mean[i]
+	}
+	for i := range n {
+		row := sv.precision[i*n : i*n+n]
+		c.alpha[i] = dot(row, c.residual)
+		for k := range p {
+			c.pj[i*p+k] = dot(row, ln.slope[k][:n])
+		}
+	}
+	logDet := c.parameters(n, p)
+	quad := 0.0
+	for i := range n {
+		c.alpha[i] -= dot(c.pj[i*p:i*p+p], c.step)
+		quad += c.residual[i] * c.alpha[i]
+	}
+	for i := range r.tests {
+		for j := range i + 1 {
+			v := sv.precision[i*n+j]
+			for k := range p {
+				v -= c.pj[i*p+k] * dot(c.inner[k*p:k*p+p], c.pj[j*p:j*p+p])
+			}
+			c.precision[i*r.tests+j], c.precision[j*r.tests+i] = v, v
+		}
+	}
+	c.log = -0.5*quad - 0.5*(sv.logDet+logDet) - 0.5*float64(n)*math.Log(2*math.Pi)
+	return c
+}
+
+// parameters computes the posterior of the parameters within their cells, and
+// returns ln det(I + JᵀPJ).
+func (c *combination) parameters(n, p int) float64 {
+	m := mat.NewSymDense(p, nil)
+	b := make([]float64, p)
+	for k := range p {
+		for i := range n {
+			b[k] += c.pj[i*p+k] * c.residual[i]
+		}
+		for l := k; l < p; l++ {
+			v := 0.0
+			for i := range n {
+				v += c.slope[k][i] * c.pj[i*p+l]
+			}
+			if k == l {
+				v++
+			}
+			m.SetSym(k, l, v)
+		}
+	}
+	var chol mat.Cholesky
+	var inverse mat.SymDense
+	// I + JᵀPJ is positive definite however the rounding falls, unless the
+	// precision is so large that nothing is left of the unit matrix.
+	if !chol.Factorize(m) || chol.InverseTo(&inverse) != nil {
+		c.inner = make([]float64, p*p)
+		return math.Inf(1)
+	}
+	c.inner = make([]float64, p*p)
+	for k := range p {
+		for l := range p {
+			c.inner[k*p+l] = inverse.At(k, l)
+			c.step[k] += c.inner[k*p+l] * b[l]
+		}
+	}
+	return chol.LogDet()
+}
+
+func dot(a, b []float64) float64 {
+	sum := 0.0
+	for i, v := range a {
+		sum += v * b[i]
+	}
+	return sum
+}

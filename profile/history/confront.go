@@ -1,0 +1,53 @@
+package history
+
+import "math"
+
+// A test conflicts when it is further from what the others say than this many
+// of the standard deviations that judge it, and is doubtful beyond the second.
+// The first was set where one test in a hundred that nobody touched is called
+// conflicting on natural clays.
+const (
+	conflictAt = 3.05
+	doubtAt    = 2.0
+)
+
+// judgingSD is the standard deviation that a difference is judged by. The one
+// of the prediction rests on the scatter of a few tests and is itself
+// uncertain; it is shrunk by two thirds, in logarithms, to what tests of the
+// grade have elsewhere. So a 5 % difference among tests that agree to 1 % is
+// no conflict, and a wrong test in poor company still is.
+func judgingSD(predicted, grade float64) float64 {
+	return math.Cbrt(predicted * grade * grade)
+}
+
+// verdict returns the verdict on a normal score and a judged difference.
+func verdict(z, judged float64) string {
+	switch {
+	case judged > conflictAt:
+		return Conflicts
+	case judged > doubtAt && math.Abs(z) > 1.645:
+		return Doubtful
+	}
+	return Agrees
+}
+
+// certain keeps probabilities that a normal score is taken of inside its reach.
+const certain = 1e-15
+
+// tellTest confronts row i of the layer with what the other rows say.
+func (l *layer) tellTest(i int, t *Test, out *TestResult) {
+	value, sd := t.observation()
+	m := &l.post.expected[i]
+	b := m.band()
+	out.Used = true
+	out.Expected = exponential(b)
+	out.Z = quantile(math.Min(math.Max(m.below(value), certain), 1-certain))
+	out.Judged = math.Abs(value-b.Best) / judgingSD((b.High-b.Low)/(2*1.645), sd)
+	out.Wild = l.post.wild[i]
+	out.Verdict = verdict(out.Z, out.Judged)
+	here := l.lines[len(l.stations)+i]
+	out.Influence = math.Abs(here.at(0.5) - b.Best)
+}
+
+// exponential takes a band of logarithms to stresses.
+func exponential(b Band) Band { return Band{math.Exp(b.Low), math.Exp(b.Best), math.Exp(b.High)} }

@@ -1,0 +1,81 @@
+package history
+
+import (
+	"fmt"
+	"math"
+)
+
+// tell writes the layer's part of the result.
+func (l *layer) tell(out *Result) {
+	for _, m := range l.mended {
+		out.Notes = append(out.Notes, fmt.Sprintf(
+			"%s, %.2f m: σ′v0 of %.0f kPa cannot stand beside that of the other depths (%.0f kPa on their line); the history there is inferred with the latter, OCR is of the former",
+			l.name(), m.depth, m.given, m.used))
+	}
+	for i, t := range l.tests {
+		out.Tests[t] = TestResult{ID: l.in.Tests[t].ID}
+		l.tellTest(i, &l.in.Tests[t], &out.Tests[t])
+	}
+	for i, t := range l.bounds {
+		out.Tests[t] = TestResult{ID: l.in.Tests[t].ID}
+		l.tellBound(&l.in.Tests[t], &l.lines[len(l.stations)+len(l.tests)+i], &out.Tests[t])
+	}
+	for j, i := range l.stations {
+		out.Points[i] = l.in.point(i, &l.lines[j])
+	}
+	out.Zones = append(out.Zones, l.zones(out.Points)...)
+	out.Layers = append(out.Layers, l.explain())
+	switch n := len(l.tests); {
+	case n == 0 && len(l.sources) > 0:
+		out.Notes = append(out.Notes, l.name()+": no test of σ′p; the profile rests on correlations alone, which err as a whole for a site")
+	case n == 0 && len(l.near) > 0:
+		out.Notes = append(out.Notes, l.name()+": no test of σ′p here; the profile rests on neighbouring boreholes")
+	case n == 0:
+		out.Notes = append(out.Notes, l.name()+": no evidence of σ′p; the profile is what is usual in such ground and no more")
+	case n == 1:
+		out.Notes = append(out.Notes, l.name()+": one test of σ′p; the scatter of tests here is not known")
+	}
+}
+
+func (l *layer) name() string {
+	if n := l.in.Layers[l.index].Name; n != "" {
+		return n
+	}
+	return fmt.Sprintf("layer %d", l.index+1)
+}
+
+// point writes the distribution of ln σ′p at station i. The error of σ′v0 is
+// taken as independent of it.
+func (in *Input) point(i int, m *mixture) Point {
+	s := in.Stations[i]
+	b := m.band()
+	p := Point{Depth: s.Depth, Layer: s.Layer, Preconsolidation: exponential(b)}
+	_, p.LnSD = m.moments()
+	if s.EffectiveStress <= 0 {
+		return p
+	}
+	p.HasOCR = true
+	ratio := m.shifted(-math.Log(s.EffectiveStress), s.LnSD)
+	if s.LnSD == 0 {
+		p.OCR = exponential(Band{b.Low - math.Log(s.EffectiveStress), b.Best - math.Log(s.EffectiveStress), b.High - math.Log(s.EffectiveStress)})
+	} else {
+		p.OCR = exponential(ratio.band())
+	}
+	// POP: the two sides of the band and the error of σ′v0 as root sum of squares.
+	spread := 1.645 * s.EffectiveStress * s.LnSD
+	q := p.Preconsolidation
+	p.POP.Best = q.Best - s.EffectiveStress
+	p.POP.Low = p.POP.Best - math.Hypot(q.Best-q.Low, spread)
+	p.POP.High = p.POP.Best + math.Hypot(q.High-q.Best, spread)
+	last := 0.0
+	for z, limit := range in.Limits {
+		below := ratio.below(math.Log(limit))
+		p.ZoneProbability[z] = math.Max(0, below-last)
+		last = below
+		if p.OCR.Best >= limit {
+			p.Zone = Zone(z + 1)
+		}
+	}
+	p.ZoneProbability[3] = math.Max(0, 1-last)
+	return p
+}
