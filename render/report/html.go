@@ -1,6 +1,7 @@
 package report
 
 import (
+	"bytes"
 	"crypto/sha256"
 	_ "embed"
 	"encoding/base64"
@@ -88,7 +89,14 @@ func (d *Document) WriteHTML(w io.Writer, u Units) error {
 		}
 		p.Sections = append(p.Sections, h)
 	}
-	return page.Execute(w, p)
+	// Text is made harmless once, at the end: no direction mark or control
+	// character reaches the page, wherever it came from.
+	var b bytes.Buffer
+	if err := page.Execute(&b, p); err != nil {
+		return err
+	}
+	_, err := io.WriteString(w, visible(b.String()))
+	return err
 }
 
 func htmlOf(b Block, u Units) htmlBlock {
@@ -113,7 +121,7 @@ func htmlTableOf(t *Table, u Units) *htmlTable {
 	for _, r := range t.Rows {
 		row := make([]htmlCell, len(r))
 		for i, c := range r {
-			row[i] = htmlCell{visible(t.Columns[i].Format(c, u)), t.Columns[i].numeric()}
+			row[i] = htmlCell{t.Columns[i].Format(c, u), t.Columns[i].numeric()}
 		}
 		h.Rows = append(h.Rows, row)
 	}
