@@ -18,6 +18,7 @@ type context struct {
 	relations []*relation // of the rules, in their order
 	ruleOf    []*Rule     // of each relation
 
+	running *Rule    // whose check is at work
 	answers []answer // one for each decision
 }
 
@@ -66,6 +67,7 @@ func (c *context) gather(b *profile.BoreholeProfile, specimens map[*profile.Curv
 		r := c.newRow(site, b, profile.Known(t.Depth), t.Specimen, t.Stratum)
 		r.addTest(t, specimens)
 		r.addLine(t)
+		r.ownCurve()
 		c.rows = append(c.rows, r)
 	}
 	for i := range b.Results {
@@ -149,6 +151,18 @@ func (r *row) addTest(t *profile.Test, specimens map[*profile.Curve]*profile.Spe
 	if s.Recompression.Known && strings.Contains(s.RecompressionHow, "loop") {
 		r.set(curveRecompression, s.Recompression.Value)
 	}
+}
+
+// ownCurve takes w, Gs and e0 of a specimen that has no row of results from its
+// curve.
+func (r *row) ownCurve() {
+	if r.curve == nil {
+		return
+	}
+	r.put(waterContent, r.curve.WaterContent)
+	r.put(specificGravity, r.curve.SpecificGravity)
+	r.put(voidRatio, r.curve.InitialVoidRatio)
+	r.has &^= 1<<curveWater | 1<<curveGravity | 1<<curveVoidRatio
 }
 
 // leastLineSD is how far a good test may scatter about a line that is known

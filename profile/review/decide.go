@@ -84,8 +84,7 @@ func (a *answer) about(f *Finding) bool {
 	if !strings.EqualFold(d.Quantity, f.Quantity) {
 		return false
 	}
-	places := append([]Place{{f.Borehole, f.Depth, f.Specimen}}, f.Also...)
-	for _, p := range places {
+	for _, p := range f.places() {
 		if a.row == nil {
 			if strings.EqualFold(d.Borehole, p.Borehole) && !d.Depth.Known && d.Specimen == "" {
 				return true

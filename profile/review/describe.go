@@ -78,6 +78,9 @@ func (c *context) describe(r *row, rd *reading, hs []change, restored []int) Fin
 	if h.slip.how != "" || isEntered(h.v) {
 		c.suggest(&f, r, h, len(restored))
 	}
+	if h.v == preconsolidation {
+		c.explainYield(&f, r)
+	}
 	if other := rival(hs); other != nil {
 		f.with = append(f.with, other.vars...)
 		f.Message += " " + capital(other.inWords(r)) + " would do nearly as well."
@@ -208,6 +211,9 @@ func (c *context) leftOver(r *row, rd *reading, changed uint64) []Finding {
 		f.Found, f.Wanted = r.shown(v), x.wanted(r, rd.c[i])
 		f.Message = capital(x.say(r, rd.c[i])) + "."
 		f.with = append(f.with, x.vars...)
+		if v == preconsolidation && s != Note {
+			c.explainYield(&f, r)
+		}
 		f.Impact = r.impact(v, rd.c[i].want)
 		if s == Note {
 			f.Impact = 0

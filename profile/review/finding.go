@@ -34,6 +34,7 @@ type Finding struct {
 	Borehole string         `json:"borehole"`
 	Depth    profile.Number `json:"depth_m"`
 	Specimen string         `json:"specimen"`
+	Stratum  string         `json:"stratum,omitempty"` // of a finding about a whole stratum
 	Quantity string         `json:"quantity"`
 	Found    string         `json:"found"`
 	Wanted   string         `json:"wanted"`
@@ -135,7 +136,7 @@ func (f Findings) identify() {
 	for i := range f {
 		x := &f[i]
 		parts := []string{x.Rule}
-		for _, p := range []string{x.Borehole, depthText(x.Depth), x.Specimen, x.Quantity} {
+		for _, p := range []string{x.Borehole, depthText(x.Depth), x.Specimen, x.Stratum, x.Quantity} {
 			if p != "" {
 				parts = append(parts, slug(p))
 			}

@@ -122,7 +122,10 @@ var limitRules = []Rule{
 		Action: "Compare with the grading of neighbouring specimens.",
 		relation: relate(relation{
 			vars: []variable{clayFraction}, also: []variable{liquidLimit, plasticLimit, plasticityIndex}, note: 1,
-			when: func(r *row) bool { pi, ok := r.plasticity(); return ok && pi > 0 && r.v[clayFraction] > 5 && !r.organic },
+			when: func(r *row) bool {
+				pi, ok := r.plasticity()
+				return ok && pi > 0 && r.v[clayFraction] > 5 && !r.organic
+			},
 			compare: func(r *row) (comparison, bool) {
 				pi, _ := r.plasticity()
 				return betweenLog(pi/r.v[clayFraction], 0.3, 1.5, 0.25)

@@ -142,7 +142,9 @@ var phaseRules = []Rule{
 		Causes: []string{"dry in place of bulk density", "density in another unit", "void ratio wrong"},
 		Action: "Check which density the laboratory sheet gives.",
 		relation: relate(relation{
-			vars: []variable{unitWeight, specificGravity, voidRatio}, when: func(r *row) bool { return positive(unitWeight, specificGravity, voidRatio)(r) && !r.known(waterContent) },
+			vars: []variable{unitWeight, specificGravity, voidRatio}, when: func(r *row) bool {
+				return positive(unitWeight, specificGravity, voidRatio)(r) && !r.known(waterContent)
+			},
 			doubt: phaseDoubt, conflict: phaseConflict, fault: phaseFault,
 			compare: func(r *row) (comparison, bool) {
 				gs, e := r.v[specificGravity], r.v[voidRatio]

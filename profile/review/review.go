@@ -14,12 +14,18 @@ func Review(p *profile.Profile) (Findings, error) {
 	var found Findings
 	moved := c.misplaced(&found)
 	for _, r := range c.rows {
-		if !moved[r.index] {
-			found = append(found, c.rowFindings(r)...)
+		r.blamed = moved[r.index]
+		if r.blamed {
+			continue
+		}
+		for _, f := range c.rowFindings(r) {
+			r.blamed = r.blamed || f.Severity != Note
+			found = append(found, f)
 		}
 	}
 	for i := range rules {
 		if rules[i].check != nil {
+			c.running = &rules[i]
 			found = append(found, rules[i].check(c)...)
 		}
 	}

@@ -34,6 +34,7 @@ type row struct {
 	effective profile.Number // computed σ′v0
 	line      expectation    // what the rest of the ground says of σ′p here
 	strength  string         // type of strength test, folded
+	blamed    bool           // something speaks against it
 
 	property   []float64 // by property, on the scale of its comparison
 	properties uint64    // those that are known
@@ -120,18 +121,15 @@ func (r *row) void() (float64, bool) {
 // computed.
 func (r *row) number(v variable) *profile.Number {
 	switch {
-	case v <= sensitivity:
-		if r.result == nil {
-			return nil
-		}
+	case v <= sensitivity && r.result != nil:
 		return traits[v].of(r.result)
 	case r.curve == nil:
 		return nil
-	case v == curveVoidRatio:
+	case v == curveVoidRatio, v == voidRatio:
 		return &r.curve.InitialVoidRatio
-	case v == curveWater:
+	case v == curveWater, v == waterContent:
 		return &r.curve.WaterContent
-	case v == curveGravity:
+	case v == curveGravity, v == specificGravity:
 		return &r.curve.SpecificGravity
 	}
 	return nil

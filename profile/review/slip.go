@@ -40,8 +40,10 @@ var unitSlips = map[kind][]unitSlip{
 		{0.0478803, "lb/ft²"}, {47.8803, "kip/ft²"}, {95.7605, "US ton/ft²"}, {98.0665, "kgf/cm²"}, {9.80665, "t/m²"},
 		{6.89476, "lb/in²"}, {1000, "MPa"}, {0.001, "Pa"}, {100, "bar"},
 	},
-	slope: {{math.Ln10, "a slope per natural logarithm"}, {1 / math.Ln10, "a slope multiplied by 2.303 twice"}},
+	slope: {{math.Ln10, naturalLog}, {1 / math.Ln10, "ln-to-log10 conversion made twice"}},
 }
+
+const naturalLog = "slope per natural in place of log10 cycle, a factor of 2.303"
 
 // slips lists the changes worth trying on a variable.
 func slips(r *row, v variable) []slip {
@@ -65,7 +67,11 @@ func slips(r *row, v variable) []slip {
 		out = append(out, slip{value: x * f, how: how, cost: costDecimal + 0.5})
 	}
 	for _, u := range unitSlips[traits[v].kind] {
-		out = append(out, slip{value: x * u.factor, how: "the number is in " + u.unit, unit: u.unit, cost: costUnit, joint: traits[v].kind == slope || v == preconsolidation})
+		how := "the number is in " + u.unit
+		if traits[v].kind == slope {
+			how = u.unit
+		}
+		out = append(out, slip{value: x * u.factor, how: how, unit: u.unit, cost: costUnit, joint: traits[v].kind == slope || v == preconsolidation})
 	}
 	switch {
 	case v == unitWeight && r.known(waterContent) && r.v[waterContent] > 0:

@@ -84,13 +84,12 @@ func stratumRule(p int) Rule {
 	x.when = func(r *row) bool { return r.group != nil }
 	x.compare = func(r *row) (comparison, bool) { return r.group.confront(p, r) }
 	x.say = func(r *row, c comparison) string {
-		text := func(v float64) string {
-			if len(q.vars) == 1 && q.of != nil && q.name == traits[q.vars[0]].quantity {
-				return q.vars[0].text(v)
-			}
-			return fixed(v, 2)
+		text := func(v float64) string { return fixed(v, 2) }
+		unit := ""
+		if q.name == traits[q.vars[0]].quantity {
+			text, unit = q.vars[0].plain, traits[q.vars[0]].unit
 		}
-		return fmt.Sprintf("%s %s where the other %s of %s have about %s (%s to %s)", q.name, text(c.found), plural(c.n, "result"), r.stratumName(), text(c.want), text(c.low), text(c.high))
+		return fmt.Sprintf("%s %s%s where the other %s of %s have about %s%s (%s to %s)", q.name, text(c.found), unit, plural(c.n, "result"), r.stratumName(), text(c.want), unit, text(c.low), text(c.high))
 	}
 	x.wanted = func(r *row, c comparison) string {
 		v := q.vars[0]
@@ -114,7 +113,7 @@ func (g *group) confront(p int, r *row) (comparison, bool) {
 	q := &properties[p]
 	x, ok := q.at(r)
 	if !ok {
-		if q.log && r.has&q.mask == q.mask {
+		if v, applies := q.of(r); applies && q.log && v <= 0 {
 			x = math.Inf(-1) // zero or less of what must be positive
 		} else {
 			return comparison{}, false
