@@ -22,17 +22,21 @@ func BehaviourIndex(net, effective, frictionRatio float64) Measure {
 		return Measure{}
 	}
 	friction := 1.22 + math.Log10(math.Max(frictionRatio, leastFriction))
-	over := math.Log10(net / correlate.Atmospheric)
-	under := math.Log10(correlate.Atmospheric / effective)
-	index := func(n float64) float64 { return math.Hypot(3.47-(over+n*under), friction) }
-	ic := index(1)
+	ic := index(math.Log10(net/effective), friction)
 	if ic > clayInMethod {
 		return Of(ic)
 	}
-	if ic = index(0.5); ic > clayInMethod {
-		ic = index(0.75)
+	over := math.Log10(net / correlate.Atmospheric)
+	under := math.Log10(correlate.Atmospheric / effective)
+	if ic = index(over+0.5*under, friction); ic > clayInMethod {
+		ic = index(over+0.75*under, friction)
 	}
 	return Of(ic)
+}
+
+// index is the distance of log Qn and 1.22 + log F from the corner of the chart.
+func index(logQ, friction float64) float64 {
+	return math.Sqrt((3.47-logQ)*(3.47-logQ) + friction*friction)
 }
 
 const (

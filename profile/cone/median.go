@@ -20,7 +20,7 @@ func median(x []float64) float64 {
 }
 
 // few is a length that is sorted faster than it is searched.
-const few = 24
+const few = 10
 
 // nth reorders x so that x[k] is what it would be if sorted, with nothing greater
 // before it and nothing less after it, and returns it. Each step keeps the side of
@@ -51,7 +51,11 @@ func nth(x []float64, k int) float64 {
 			return x[k]
 		}
 	}
-	slices.Sort(x[low : high+1])
+	for i := low + 1; i <= high; i++ {
+		for j := i; j > low && x[j] < x[j-1]; j-- {
+			x[j], x[j-1] = x[j-1], x[j]
+		}
+	}
 	return x[k]
 }
 
