@@ -50,6 +50,7 @@ func BandOf(q Quantity, v Values, use []string) (Band, error) {
 		return Band{}, err
 	}
 	band := Band{Quantity: q, Warnings: v.Contradictions()}
+	band.Members = make([]Member, 0, len(candidates))
 	var refused []error
 	for _, c := range candidates {
 		e, err := c.Evaluate(v)
@@ -60,7 +61,7 @@ func BandOf(q Quantity, v Values, use []string) (Band, error) {
 			refused = append(refused, err)
 			continue
 		}
-		band.Members = append(band.Members, Member{Correlation: c, Estimate: e})
+		band.Members = append(band.Members, Member{Correlation: *c, Estimate: e})
 	}
 	if len(band.Members) == 0 {
 		if refused != nil {
@@ -74,7 +75,7 @@ func BandOf(q Quantity, v Values, use []string) (Band, error) {
 }
 
 // chosen returns the entries a band is made from, in catalogue order.
-func chosen(q Quantity, v Values, use []string) ([]Correlation, error) {
+func chosen(q Quantity, v Values, use []string) ([]*Correlation, error) {
 	for _, id := range use {
 		c, ok := ByID(id)
 		if !ok {
@@ -88,9 +89,10 @@ func chosen(q Quantity, v Values, use []string) ([]Correlation, error) {
 	if v["organic"] > organicFrom {
 		ground = Organic
 	}
-	var out []Correlation
-	for _, c := range For(q) {
-		if slices.Contains(use, c.ID) || len(use) == 0 && c.Ground == ground && !c.Plausibility {
+	var out []*Correlation
+	for i := range catalogue {
+		c := &catalogue[i]
+		if c.Quantity == q && (slices.Contains(use, c.ID) || len(use) == 0 && c.Ground == ground && !c.Plausibility) {
 			out = append(out, c)
 		}
 	}

@@ -3,6 +3,7 @@ package correlate
 import (
 	"errors"
 	"math"
+	"slices"
 	"strings"
 	"testing"
 )
@@ -217,6 +218,35 @@ func TestLeftOutIsNotInTheCatalogue(t *testing.T) {
 	for _, o := range LeftOut() {
 		if o.Name == "" || o.Reason == "" {
 			t.Errorf("omission without name or reason: %+v", o)
+		}
+	}
+}
+
+// TestVerificationMarks holds the strongest mark to the list of formulas that
+// were read in a source: nothing else may claim it.
+func TestVerificationMarks(t *testing.T) {
+	read := strings.Fields(`terzaghi-peck-1967 wroth-wood-1978 rendon-herrero-1983
+		jsidre-193-1998-w jsidre-193-1998-e jsidre-194-1998 nagaraj-1988
+		mesri-1975-yield chandler-1988 marchetti-1980-ocr marchetti-1980-k0 marchetti-1980-su
+		mesri-1975 jamiolkowski-1985 wroth-1979 en1997-k0 jaky-1948 brooker-ireland-1965`)
+	consistent := strings.Fields(`kulhawy-mayne-1990-cc nagaraj-murthy-1985-cc kulhawy-mayne-1990-cs
+		nagaraj-murthy-1985-cs nakase-1988-cs burland-1990-icl nagaraj-murthy-1986`)
+	for _, c := range All() {
+		if got, want := c.Verified == FormulaRead, slices.Contains(read, c.ID); got != want {
+			t.Errorf("%s: marked %q", c.ID, c.Verified)
+		}
+		if got, want := c.Verified == Consistent, slices.Contains(consistent, c.ID); got != want {
+			t.Errorf("%s: marked %q", c.ID, c.Verified)
+		}
+	}
+}
+
+// TestOnlyDataIsKnown holds the scatter said to be known to the relations that
+// were computed on open data; the cone rules share one.
+func TestOnlyDataIsKnown(t *testing.T) {
+	for _, c := range All() {
+		if c.Scatter.Known != strings.HasPrefix(c.Scatter.Note, "computed on open data") {
+			t.Errorf("%s: %+v", c.ID, c.Scatter)
 		}
 	}
 }

@@ -52,6 +52,7 @@ var arithmetic = []struct {
 	{"burland-1990-cc", Values{"eL": 1.5}, 0.344},
 	{"burland-1990-cc", Values{"eL": 2.7}, 0.6512},
 	{"jsidre-193-1998-w", Values{"w": 60, "PL": 30}, 0.309},
+	{"jsidre-193-1998-e", Values{"e0": 1.8, "eP": 0.8}, 0.366},
 	{"jsidre-194-1998", Values{"St": 8, "w": 60, "PL": 30}, 0.58621},
 	{"nakase-1988-cc", Values{"PI": 30}, 0.3569},
 	{"sridharan-nagaraj-2000-pi", Values{"PI": 30}, 0.4704},

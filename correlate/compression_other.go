@@ -65,6 +65,16 @@ var compressionReconstituted = []Correlation{
 		eval: func(v Values) float64 { return 0.007*(v["w"]-v["PL"]) + 0.099 },
 	},
 	{
+		ID: "jsidre-193-1998-e", Name: "Trans. JSIDRE 193 (1998), void ratio", Quantity: CompressionIndex,
+		Formula: "Cc' = 0.302·(e0 − eP) + 0.064, eP = Gs·PL/100",
+		Inputs:  []Input{input("e0"), input("eP")},
+		Soil:    "remoulded clay", Ground: Reconstituted,
+		Family: familyJSIDRE, Rank: 3,
+		Scatter: assumedCompressionScatter,
+		Source:  "Trans. Jpn Soc. Irrig. Drain. Reclam. Eng. 1998, No. 193, p. 81 (r = 0.976)", Verified: FormulaRead,
+		eval: func(v Values) float64 { return 0.302*(v["e0"]-v["eP"]) + 0.064 },
+	},
+	{
 		ID: "jsidre-194-1998", Name: "Trans. JSIDRE 194 (1998)", Quantity: CompressionIndex,
 		Formula: "Cc = St^0.22·[0.009·(w0 − PL) + 0.101]",
 		Inputs:  []Input{input("St").within(1, 100, usualRange), input("w"), input("PL")},

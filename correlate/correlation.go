@@ -113,9 +113,9 @@ func All() []Correlation { return slices.Clone(catalogue) }
 
 // ByID returns the correlation of that identifier.
 func ByID(id string) (Correlation, bool) {
-	for _, c := range catalogue {
-		if c.ID == id {
-			return c, true
+	for i := range catalogue {
+		if catalogue[i].ID == id {
+			return catalogue[i], true
 		}
 	}
 	return Correlation{}, false
@@ -124,9 +124,9 @@ func ByID(id string) (Correlation, bool) {
 // For returns the correlations for a quantity, in the order of the catalogue.
 func For(q Quantity) []Correlation {
 	var out []Correlation
-	for _, c := range catalogue {
-		if c.Quantity == q {
-			out = append(out, c)
+	for i := range catalogue {
+		if catalogue[i].Quantity == q {
+			out = append(out, catalogue[i])
 		}
 	}
 	return out

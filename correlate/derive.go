@@ -25,6 +25,7 @@ var derivations = []derivation{
 	{"n0", []string{"e0"}, "100·e0/(1 + e0)", func(v Values) float64 { return 100 * v["e0"] / (1 + v["e0"]) }},
 	{"e0", []string{"n0"}, "n0/(100 − n0)", func(v Values) float64 { return v["n0"] / (100 - v["n0"]) }},
 	{"eL", []string{"LL", "Gs"}, "Gs·LL/100", func(v Values) float64 { return v["Gs"] * v["LL"] / 100 }},
+	{"eP", []string{"PL", "Gs"}, "Gs·PL/100", func(v Values) float64 { return v["Gs"] * v["PL"] / 100 }},
 	{"e0eL", []string{"e0", "eL"}, "e0/eL", func(v Values) float64 { return v["e0"] / v["eL"] }},
 	{"e0eL", []string{"w", "LL"}, "w/LL, taken as saturated", func(v Values) float64 { return v["w"] / v["LL"] }},
 	{"OCR", []string{"preconsolidation", "effective"}, "σ′p/σ′v0", func(v Values) float64 { return v["preconsolidation"] / v["effective"] }},
@@ -54,20 +55,25 @@ func resolve(symbol string, given Values, busy ...string) (value float64, derive
 		if d.symbol != symbol {
 			continue
 		}
-		args, all := Values{}, true
-		for _, s := range d.from {
-			x, _, found := 0.0, "", false
+		// Most derivations fail at once: a map is made only where none does.
+		var found [4]float64
+		all := true
+		for i, s := range d.from {
+			x, _, known := 0.0, "", false
 			if !slices.Contains(busy, s) {
-				x, _, found = resolve(s, given, busy...)
+				x, _, known = resolve(s, given, busy...)
 			}
-			if !found {
-				all = false
+			if all = all && known; !all {
 				break
 			}
-			args[s] = x
+			found[i] = x
 		}
 		if !all {
 			continue
+		}
+		args := make(Values, len(d.from))
+		for i, s := range d.from {
+			args[s] = found[i]
 		}
 		if x := d.value(args); !math.IsNaN(x) && !math.IsInf(x, 0) {
 			return x, d.words, true
@@ -89,6 +95,7 @@ var identities = []identity{
 	{"LI", 0.1, 0, "one of w, PL, PI and LI is not of this specimen, or is mistyped"},
 	{"n0", 0.5, 0, "porosity and void ratio disagree"},
 	{"eL", 0.02, 0.02, "LL, Gs and the void ratio at the liquid limit disagree"},
+	{"eP", 0.02, 0.02, "PL, Gs and the void ratio at the plastic limit disagree"},
 	{"OCR", 0.02, 0.03, "the stresses and the ratio disagree"},
 	{"Q", 0.05, 0.05, "the cone values are not of the same reading, or the stresses differ"},
 	{"qeff", 5, 0.05, "the cone values are not of the same reading, or the stresses differ"},

@@ -52,6 +52,7 @@ var variables = []Variable{
 	{"n0", "n0", "porosity", "%", between(0, 100)},
 	{"Gs", "Gs", "specific gravity", "", between(1, 5)},
 	{"eL", "eL", "void ratio at the liquid limit", "", between(0, 30)},
+	{"eP", "eP", "void ratio at the plastic limit", "", between(0, 20)},
 	{"e0eL", "e0/eL", "void ratio over that at the liquid limit", "", between(0, 20)},
 	{"organic", "organic", "organic content", "%", between(-1e-9, 100.001)},
 	{"St", "St", "sensitivity", "", between(0.9, 5000)},

@@ -85,6 +85,7 @@ func TestBadInput(t *testing.T) {
 		{"two soundings under one name", append(slices.Clone(good), change(good, func(_ int, r *Reading) { r.ConeResistance.Value *= 2 })...), known, "two soundings under one name", false},
 		{"starts above ground", append([]Reading{{Depth: -0.5, ConeResistance: Of(1)}, {Depth: -0.1, ConeResistance: Of(1)}}, good...), known, "above the ground", true},
 		{"stops in air", append(slices.Clone(good), Reading{Depth: 20.5, ConeResistance: Of(0)}, Reading{Depth: 21, ConeResistance: Of(0.001)}), known, "stops in air", true},
+		{"a gap", append(slices.Clone(good[:300]), good[500:]...), known, "gaps without readings: 1, the widest from 6.00 to 10.02 m", false},
 		{"not numbers", append(slices.Clone(good), Reading{Depth: math.NaN(), ConeResistance: Of(1)}, Reading{Depth: 3.005, ConeResistance: Of(math.Inf(1))}, Reading{Depth: 3}), known, "3 of 1003 readings left out", true},
 		{"deeper than any", append(slices.Clone(good), Reading{Depth: 1e9, ConeResistance: Of(1)}), known, "deeper than 200 m", true},
 	}
