@@ -257,7 +257,7 @@ func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []grid
 	mark, wrong, note := c.decide(rd.opt.Decimal)
 	if g.point {
 		// Number cells of a workbook have a point; a comma means text.
-		mark, wrong, note = '.', c.ask(c.grouped), ""
+		mark, wrong, note = '.', ask(c.grouped), ""
 	}
 	told := map[place]bool{}
 	for _, p := range wrong {

@@ -10,17 +10,17 @@ import (
 // readNumber reads a number cell in the unit of its header. message tells what
 // is wrong with it.
 func readNumber(s spec, f field, mark byte, cell *profile.Cell) (n, base profile.Number, np bool, message string) {
-	shown := fmt.Sprintf("%q ", clean(cell.Text))
+	fault := func(why string) string { return fmt.Sprintf("%q %s", clean(cell.Text), why) }
 	tok := scan(cell.Text)
 	if s.ranges && tok.kind == notANumber {
 		if top, end, ok := depthRange(cell.Text); ok {
 			a, okA := top.value(mark)
 			b, okB := end.value(mark)
 			if !okA || !okB {
-				return n, base, false, shown + "is not a range of numbers"
+				return n, base, false, fault("is not a range of numbers")
 			}
 			if b <= a {
-				return n, base, false, shown + "is a range whose end does not lie below its beginning"
+				return n, base, false, fault("is a range whose end does not lie below its beginning")
 			}
 			return s.inside(a, f, cell), s.inside(b, f, cell), false, ""
 		}
@@ -31,17 +31,17 @@ func readNumber(s spec, f field, mark byte, cell *profile.Cell) (n, base profile
 	case tok.kind == nonPlastic && s.plastic:
 		return n, base, true, ""
 	case tok.kind == nonPlastic:
-		return n, base, false, shown + "is not a number"
+		return n, base, false, fault("is not a number")
 	case tok.kind == notANumber:
-		return n, base, false, shown + tok.why
+		return n, base, false, fault(tok.why)
 	case tok.bound != profile.Exact && !s.bounds:
-		return n, base, false, shown + "is a bound, not a value"
+		return n, base, false, fault("is a bound, not a value")
 	case tok.percent && f.unit.name != "%":
-		return n, base, false, shown + "carries a percent sign in a column that is not in percent"
+		return n, base, false, fault("carries a percent sign in a column that is not in percent")
 	}
 	v, ok := tok.value(mark)
 	if !ok {
-		return n, base, false, shown + "is not a number"
+		return n, base, false, fault("is not a number")
 	}
 	n = s.inside(v, f, cell)
 	n.Bound, n.Assumed = tok.bound, tok.assumed

@@ -1,6 +1,9 @@
 package intake
 
-import "fmt"
+import (
+	"fmt"
+	"strings"
+)
 
 // A numeral is a number cell before its decimal mark is known.
 type numeral struct {
@@ -11,31 +14,47 @@ type numeral struct {
 
 // A census counts what the number cells of one file say of its decimal mark.
 type census struct {
-	points, commas []numeral // can only be read with that mark
-	dotted         []numeral // "1.234": a decimal point, unless the file uses commas
-	grouped        []numeral // "1,234": could be either
+	points, commas tally // can only be read with that mark
+	dotted         tally // "1.234": a decimal point, unless the file uses commas
+	grouped        tally // "1,234": could be either
+}
+
+// A tally is how many cells say something, and which: enough of them to report.
+type tally struct {
+	n     int
+	cells []numeral
+}
+
+// maxTold is how many cells of one kind are worth reporting one by one.
+const maxTold = 1000
+
+func (t *tally) add(n numeral) {
+	t.n++
+	if len(t.cells) < maxTold {
+		t.cells = append(t.cells, n)
+	}
 }
 
 func (c *census) add(n numeral) {
+	// Nearly every number has one point and not three digits after it.
+	if i := strings.IndexByte(n.digits, '.'); i >= 0 && len(n.digits)-i != 4 && strings.IndexAny(n.digits[i+1:], "., '") < 0 && strings.IndexAny(n.digits[:i], ", '") < 0 {
+		c.points.add(n)
+		return
+	}
 	point, asPoint := under(n.digits, '.')
 	comma, asComma := under(n.digits, ',')
 	switch {
 	case asPoint && asComma && point == comma:
 	case asPoint && !asComma:
-		c.points = append(c.points, n)
+		c.points.add(n)
 	case asComma && !asPoint:
-		c.commas = append(c.commas, n)
+		c.commas.add(n)
 	case asPoint && asComma:
 		// Both readings differ, so exactly one mark stands before three digits.
-		for i := range n.digits {
-			if n.digits[i] == '.' {
-				c.dotted = append(c.dotted, n)
-				return
-			}
-			if n.digits[i] == ',' {
-				c.grouped = append(c.grouped, n)
-				return
-			}
+		if i := strings.IndexAny(n.digits, ".,"); n.digits[i] == '.' {
+			c.dotted.add(n)
+		} else {
+			c.grouped.add(n)
 		}
 	}
 }
@@ -48,10 +67,10 @@ func (c *census) decide(given string) (mark byte, wrong []Problem, note string) 
 		return '.', nil, ""
 	case given == ",":
 		return ',', nil, "decimal comma, as asked"
-	case len(c.commas) > 0 && len(c.points) > 0:
-		few, other, mark, word, otherWord := c.commas, c.points[0], byte('.'), "comma", "point"
-		if len(c.points) < len(c.commas) {
-			few, other, mark, word, otherWord = c.points, c.commas[0], ',', "point", "comma"
+	case c.commas.n > 0 && c.points.n > 0:
+		few, other, mark, word, otherWord := c.commas.cells, c.points.cells[0], byte('.'), "comma", "point"
+		if c.points.n < c.commas.n {
+			few, other, mark, word, otherWord = c.points.cells, c.commas.cells[0], ',', "point", "comma"
 		}
 		for _, n := range few {
 			wrong = append(wrong, Problem{Line: n.line, Column: n.column, Name: n.name,
@@ -59,21 +78,21 @@ func (c *census) decide(given string) (mark byte, wrong []Problem, note string) 
 				Wanted:  "one decimal mark in the whole file"})
 		}
 		return mark, wrong, ""
-	case len(c.commas) > 0:
-		return ',', c.ask(c.dotted), "decimal comma"
-	case len(c.points) > 0:
-		if len(c.grouped) > 0 {
-			note = fmt.Sprintf("decimal point; %q of line %d is read with a comma between thousands", c.grouped[0].text, c.grouped[0].line)
+	case c.commas.n > 0:
+		return ',', ask(c.dotted), "decimal comma"
+	case c.points.n > 0:
+		if c.grouped.n > 0 {
+			note = fmt.Sprintf("decimal point; %q of line %d is read with a comma between thousands", c.grouped.cells[0].text, c.grouped.cells[0].line)
 		}
 		return '.', nil, note
 	default:
-		return '.', c.ask(c.grouped), ""
+		return '.', ask(c.grouped), ""
 	}
 }
 
 // ask reports the cells that nothing in the file decides.
-func (c *census) ask(cells []numeral) (wrong []Problem) {
-	for _, n := range cells {
+func ask(t tally) (wrong []Problem) {
+	for _, n := range t.cells {
 		point, _ := under(n.digits, '.')
 		comma, _ := under(n.digits, ',')
 		wrong = append(wrong, Problem{Line: n.line, Column: n.column, Name: n.name,

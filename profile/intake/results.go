@@ -79,8 +79,9 @@ func (s *site) results(g *grid) {
 		s.rd.noteFile(g.file, fmt.Sprintf("no borehole column: all rows are of one borehole, called %q after the file", s.out.Name))
 	}
 	tables := map[int]row[resultRow]{} // the row that first gave a water table
-	for _, r := range t.rows {
-		res := r.Value.Result
+	where := map[int][]*profile.Result{}
+	for k, r := range t.rows {
+		res := &t.rows[k].Value.Result
 		name := r.Value.Borehole
 		if unnamed {
 			name = s.out.Name
@@ -98,11 +99,21 @@ func (s *site) results(g *grid) {
 		res.Extra = extras(t, r)
 		b := &s.out.Boreholes[i]
 		s.waterTable(t, r, b, tables, i)
-		b.Results = append(b.Results, res)
+		where[i] = append(where[i], res)
 	}
 	for i := range s.out.Boreholes {
-		slices.SortStableFunc(s.out.Boreholes[i].Results, func(a, b profile.Result) int { return compare(a.Depth.Value, b.Depth.Value) })
+		s.out.Boreholes[i].Results = byDepth(where[i])
 	}
+}
+
+// byDepth sorts results by depth, those of one depth in table order.
+func byDepth(results []*profile.Result) []profile.Result {
+	slices.SortStableFunc(results, func(a, b *profile.Result) int { return compare(a.Depth.Value, b.Depth.Value) })
+	var out []profile.Result
+	for _, r := range results {
+		out = append(slices.Grow(out, len(results)-len(out)), *r)
+	}
+	return out
 }
 
 // checkResult checks what one row says of itself.
