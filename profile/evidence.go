@@ -34,18 +34,22 @@ var sources = []source{
 // ground.
 func isVane(r *Result) bool { return strings.Contains(strings.ToLower(r.StrengthTest), "vane") }
 
+// told is what Infer is told about a borehole, and how its answer finds its way
+// back: Infer hears only of the strata that some evidence speaks about.
+type told struct {
+	history.Input
+	stratum []int // of the borehole, for each layer
+	point   []int // of the profile, for each station
+}
+
 // evidence gathers what Infer is told about a borehole.
-func (g *ground) evidence(site *Site, p *Profile, b *BoreholeProfile, stations []station) history.Input {
-	in := history.Input{
+func (g *ground) evidence(site *Site, p *Profile, b *BoreholeProfile, stations []station) told {
+	in := told{Input: history.Input{
 		Limits:          [3]float64{site.Settings.Limits.NormallyConsolidated, site.Settings.Limits.LightlyOverconsolidated, site.Settings.Limits.HeavilyOverconsolidated},
 		WaterTable:      g.borehole.WaterTableDepth.Value,
 		HasWater:        g.borehole.WaterTableDepth.Known,
 		WaterUnitWeight: site.Settings.WaterUnitWeight,
-	}
-	for i := range g.borehole.Strata {
-		s := &g.borehole.Strata[i]
-		in.Layers = append(in.Layers, history.Layer{Name: s.Name, Top: s.Top, Base: s.Base})
-	}
+	}}
 	for i := range b.Tests {
 		if t, ok := asEvidence(&b.Tests[i], i); ok {
 			t.Layer = g.layerOf(b.Tests[i].Depth, b.Tests[i].Stratum)
@@ -63,7 +67,62 @@ func (g *ground) evidence(site *Site, p *Profile, b *BoreholeProfile, stations [
 		}
 		in.Stations = append(in.Stations, s)
 	}
+	in.keepHeard(g, b)
 	return in
+}
+
+// keepHeard drops the strata that no evidence speaks about, with a note: nothing
+// is said of their stress history, however wide a band could be drawn.
+func (in *told) keepHeard(g *ground, b *BoreholeProfile) {
+	heard := make([]bool, len(g.borehole.Strata))
+	for _, t := range in.Tests {
+		heard[t.Layer] = true
+	}
+	for _, t := range in.Neighbours {
+		heard[t.Layer] = true
+	}
+	for _, r := range in.Readings {
+		heard[r.Layer] = true
+	}
+	layer := make([]int, len(heard)) // of Infer, for each stratum
+	for i, h := range heard {
+		s := &g.borehole.Strata[i]
+		layer[i] = -1
+		if !h {
+			b.Notes = append(b.Notes, fmt.Sprintf("%s, %.2f to %.2f m: no test, sounding or neighbouring borehole speaks of its stress history, so none is given.", stratumName(s.Name), s.Top, s.Base))
+			continue
+		}
+		layer[i] = len(in.Layers)
+		in.Layers = append(in.Layers, history.Layer{Name: s.Name, Top: s.Top, Base: s.Base})
+		in.stratum = append(in.stratum, i)
+	}
+	for i := range in.Tests {
+		in.Tests[i].Layer = layer[in.Tests[i].Layer]
+	}
+	for i := range in.Neighbours {
+		in.Neighbours[i].Layer = layer[in.Neighbours[i].Layer]
+	}
+	for i := range in.Readings {
+		in.Readings[i].Layer = layer[in.Readings[i].Layer]
+	}
+	known := in.Known[:0]
+	for _, k := range in.Known {
+		if k.Layer >= 0 {
+			if k.Layer = layer[k.Layer]; k.Layer < 0 {
+				continue // about a stratum that is not heard
+			}
+		}
+		known = append(known, k)
+	}
+	in.Known = known
+	stations := in.Stations[:0]
+	for i, s := range in.Stations {
+		if s.Layer = layer[s.Layer]; s.Layer >= 0 {
+			stations = append(stations, s)
+			in.point = append(in.point, i)
+		}
+	}
+	in.Stations = stations
 }
 
 // asEvidence turns a used test into evidence; the index comes back with the

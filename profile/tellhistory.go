@@ -21,20 +21,17 @@ func rangeOf(b history.Band) Range {
 // of the ground says of every test.
 func (g *ground) tellHistory(site *Site, p *Profile, b *BoreholeProfile, stations []station) {
 	in := g.evidence(site, p, b, stations)
-	if len(in.Tests) == 0 && len(in.Readings) == 0 && len(in.Neighbours) == 0 {
-		b.Notes = append(b.Notes, "No preconsolidation stress was measured here and nothing stands in for one: stresses only.")
+	if len(in.Layers) == 0 {
+		b.Notes = append(b.Notes[:0], "No preconsolidation stress was measured here and nothing stands in for one: stresses only.")
 		return
 	}
-	result, err := history.Infer(in)
+	result, err := history.Infer(in.Input)
 	if err != nil {
 		b.Notes = append(b.Notes, "No stress history is given: "+err.Error())
 		return
 	}
-	silent := g.silent(&in, b)
 	for i := range result.Points {
-		if !silent[stations[i].stratum] {
-			tellPoint(&b.Points[i], &result.Points[i])
-		}
+		tellPoint(&b.Points[in.point[i]], &result.Points[i])
 	}
 	for i, t := range result.Tests {
 		if t.Used {
@@ -42,23 +39,17 @@ func (g *ground) tellHistory(site *Site, p *Profile, b *BoreholeProfile, station
 		}
 	}
 	for _, z := range result.Zones {
-		if silent[z.Layer] {
-			continue
-		}
 		b.Zones = append(b.Zones, zoneInterval(z))
 	}
 	for _, l := range result.Layers {
-		if silent[l.Layer] {
-			continue
-		}
-		s := &b.Strata[l.Layer]
+		s := &b.Strata[in.stratum[l.Layer]]
 		s.Sentence = l.Sentence
 		for _, m := range l.Mechanisms {
 			s.Mechanisms = append(s.Mechanisms, Mechanism{Name: m.Name, Probability: m.Probability, Parameter: Parameter(m.Parameter)})
 		}
 	}
 	if n := result.NextTest; n.Known {
-		b.NextTest = &NextTest{Depth: n.Depth, Stratum: g.borehole.Strata[n.Layer].Name, Narrowing: n.Narrowing}
+		b.NextTest = &NextTest{Depth: n.Depth, Stratum: g.borehole.Strata[in.stratum[n.Layer]].Name, Narrowing: n.Narrowing}
 	}
 	if i := result.MostInfluential; i >= 0 {
 		t := &b.Tests[in.Tests[i].ID]
@@ -101,27 +92,4 @@ func zoneInterval(h history.ZoneInterval) ZoneInterval {
 		z.OrZone = zoneOf(h.Other)
 	}
 	return z
-}
-
-// silent tells which strata no evidence speaks about: nothing is said of their
-// stress history, however wide a band could be drawn.
-func (g *ground) silent(in *history.Input, b *BoreholeProfile) []bool {
-	heard := make([]bool, len(in.Layers))
-	for _, t := range in.Tests {
-		heard[t.Layer] = true
-	}
-	for _, t := range in.Neighbours {
-		heard[t.Layer] = true
-	}
-	for _, r := range in.Readings {
-		heard[r.Layer] = true
-	}
-	silent := make([]bool, len(heard))
-	for i, h := range heard {
-		if silent[i] = !h; silent[i] {
-			s := &g.borehole.Strata[i]
-			b.Notes = append(b.Notes, fmt.Sprintf("%s, %.2f to %.2f m: no test, sounding or neighbouring borehole speaks of its stress history, so none is given.", stratumName(s.Name), s.Top, s.Base))
-		}
-	}
-	return silent
 }
