@@ -127,9 +127,10 @@ func cappedAtPassive(v Values, j judged) judged {
 		return j
 	}
 	s := sine(phi)
-	if passive := (1 + s) / (1 - s); j.value > passive {
-		j.warnings = append(j.warnings, "K0 "+number(j.value)+" is above the passive coefficient and was capped at "+number(passive))
-		j.value = passive
+	j.most = (1 + s) / (1 - s)
+	if j.value > j.most {
+		j.warnings = append(j.warnings, "K0 "+number(j.value)+" is above the passive coefficient and was capped at "+number(j.most))
+		j.value = j.most
 	}
 	return j
 }

@@ -40,6 +40,7 @@ type Correlation struct {
 // judged is the verdict of a guard.
 type judged struct {
 	value    float64
+	most     float64 // what the quantity cannot exceed; 0 where it is not limited
 	warnings []string
 	refused  string // why the entry does not apply; "" where it does
 }

@@ -61,13 +61,13 @@ func (c Correlation) Evaluate(given Values) (Estimate, error) {
 		}
 		warnings = append(warnings, u.rangeWarnings()...)
 	}
-	value := c.eval(args)
+	value, most := c.eval(args), 0.0
 	if c.guard != nil {
 		j := c.guard(withContext(args, given), value)
 		if j.refused != "" {
 			return Estimate{}, fmt.Errorf("%w: %s: %s", ErrNotApplicable, c.ID, j.refused)
 		}
-		value, warnings = j.value, append(warnings, j.warnings...)
+		value, most, warnings = j.value, j.most, append(warnings, j.warnings...)
 	}
 	if !c.sensible(value) {
 		return Estimate{}, fmt.Errorf("%w: %s: the values give %s %s, which has no meaning",
@@ -75,6 +75,9 @@ func (c Correlation) Evaluate(given Values) (Estimate, error) {
 	}
 	e := Estimate{Value: value, Used: used, Warnings: append(warnings, contradictions(given, args)...)}
 	e.Low, e.High = c.Scatter.band(value)
+	if most > 0 {
+		e.High = math.Min(e.High, most)
+	}
 	return e, nil
 }
 

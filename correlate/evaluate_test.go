@@ -69,6 +69,19 @@ func TestEvaluateGuards(t *testing.T) {
 	}
 }
 
+// TestCoefficientAtRestNeverExceedsPassive holds the upper point of the band to
+// the cap too.
+func TestCoefficientAtRestNeverExceedsPassive(t *testing.T) {
+	const rounding = 1e-12
+	for _, ocr := range []float64{1, 4, 12, 20, 100} {
+		e := must(t, "mayne-kulhawy-1982", Values{"phi": 25, "OCR": ocr})
+		s := math.Sin(25 * math.Pi / 180)
+		if passive := (1 + s) / (1 - s); e.High > passive+rounding || e.Value > e.High {
+			t.Errorf("OCR %v: %v to %v above %v", ocr, e.Value, e.High, passive)
+		}
+	}
+}
+
 func TestDerivedInputsAreSaid(t *testing.T) {
 	e := must(t, "ching-phoon-2012-yield", Values{"w": 45, "LL": 60, "PL": 25, "St": 5})
 	if len(e.Used) != 2 || e.Used[0].Derived != "(w − PL)/PI" || math.Abs(e.Used[0].Value-20.0/35) > 1e-12 {

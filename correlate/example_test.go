@@ -3,6 +3,7 @@ package correlate_test
 import (
 	"errors"
 	"fmt"
+	"strings"
 
 	"pastload/correlate"
 )
@@ -43,6 +44,32 @@ func ExampleBandOf() {
 	// al-khafaji-andersland-1992   0.33
 	// koppula-1981                 0.40
 	// azzouz-1976-e0-ll            0.34
+}
+
+// Columns that follow from the stress history: undrained strength in the form
+// S·σ′v0·OCR^m, and the coefficient of earth pressure at rest.
+func ExampleCorrelation_Evaluate_stressHistory() {
+	here := correlate.Values{"effective": 60, "preconsolidation": 150, "phi": 25}
+	for _, id := range []string{"ladd-1991-clay", "mayne-kulhawy-1982"} {
+		c, _ := correlate.ByID(id)
+		e, err := c.Evaluate(here)
+		if err != nil {
+			fmt.Println(err)
+			return
+		}
+		value := strings.TrimSpace(fmt.Sprintf("%.2f %s", e.Value, c.Quantity.Unit()))
+		fmt.Printf("%s %s, %s\n", c.Quantity.Symbol(), value, c.Verified)
+		for _, u := range e.Used {
+			if u.Derived != "" {
+				fmt.Printf("  %s = %s = %.2f\n", u.Written, u.Derived, u.Value)
+			}
+		}
+	}
+	// Output:
+	// su 27.47 kPa, from memory, unverified
+	//   OCR = σ′p/σ′v0 = 2.50
+	// K0 0.85, from memory, unverified
+	//   OCR = σ′p/σ′v0 = 2.50
 }
 
 func ExampleValues_Contradictions() {

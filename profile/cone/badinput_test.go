@@ -126,6 +126,22 @@ func TestNothingToEvaluate(t *testing.T) {
 	}
 }
 
+// TestSandInBar: 150 bar of sand named MPa is beyond any cone, and as kPa its
+// friction would be that of no soil.
+func TestSandInBar(t *testing.T) {
+	readings := change(clay(1000, 0.02), func(_ int, r *Reading) {
+		*r = Reading{Depth: r.Depth, ConeResistance: Of(150), SleeveFriction: Of(80)}
+	})
+	s := evaluate(t, readings, known)
+	wantNote(t, s.Notes, "taken as bar or kgf/cm²")
+	if q := s.Points[500].Corrected; math.Abs(q-15000) > 1e-6 {
+		t.Errorf("qt %v kPa", q)
+	}
+	if len(s.Layers) != 0 {
+		t.Errorf("%d layers of clay in sand", len(s.Layers))
+	}
+}
+
 // TestUnitNotClear gives 150 to 600 without friction or pore pressure: kPa of a
 // soft clay, or bar of a dense sand.
 func TestUnitNotClear(t *testing.T) {

@@ -27,7 +27,10 @@ type Layer struct {
 	LnSD float64
 
 	BehaviourIndex Measure
-	Yield          []Yield // σ′p by each relation that applies, net resistance first
+
+	// Yield is σ′p by each relation that applies, net resistance first. They come
+	// from the same readings: their errors are not independent.
+	Yield []Yield
 }
 
 // Yield is σ′p from a relation at a layer, by the published factor. Its standard
