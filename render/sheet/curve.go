@@ -59,7 +59,7 @@ func Curve(w io.Writer, in CurveInput) error {
 	s.drawSummary()
 	s.caption.draw(s.c, s.captionBox.Left, s.captionBox.Top)
 	titleBlock(s.c, in.Page.frame(), in.Settings.Title, Figure{
-		Number: in.Figure, Sheet: in.Sheet, Of: in.Of, Title: "Compression curve, specimen " + in.Specimen.Name,
+		Number: in.Figure, Sheet: in.Sheet, Of: in.Of, Title: "compression curve, specimen " + in.Specimen.Name,
 		Scale: "–", Paper: in.Page.Name,
 	})
 	return s.c.Finish(w)

@@ -23,77 +23,109 @@ func (s *curveSheet) drawStrip() {
 			s.c.Line(x, s.strip.Top, x, s.strip.Bottom, draw.Pen{Width: draw.Hair})
 		}
 	}
-	for _, m := range s.methods() {
-		y += s.stripRow()
-		name, points := s.letter(m)+"  "+m.Name, ""
-		if n := numbers(m.Points); n != "" && len(s.points) <= mostNumbered {
-			points = ", points " + n
-		}
-		marker := draw.Marker{Shape: draw.Circle, Solid: m.Used, Size: 1.8}
-		if !m.Used {
-			name += " (not used)"
-		}
-		s.stripLine(y, name, points, s.f.small, m.Stress, m.Low, m.High, marker, draw.Thin)
+	rows := s.stripRows()
+	// The names stand on the left where all of them have room before the bars,
+	// else behind the figures.
+	widest, first := 0.0, s.strip.Right
+	for _, r := range rows {
+		widest = math.Max(widest, r.font.Width(draw.Text(r.name)))
+		first = math.Min(first, math.Min(s.main.x.At(r.low), s.main.x.At(r.value)))
 	}
-	y += s.stripRow()
-	switch {
-	case yield.Bound == oedometer.Exact && yield.Best > 0:
-		s.stripLine(y, "combined, 5 to 95 %", "", bold(s.f.small), yield.Best, yield.Low, yield.High, draw.Marker{Shape: draw.Square, Solid: true, Size: 2}, draw.Thick)
-	case yield.Best > 0 && yield.Bound != oedometer.Undetermined:
-		shape := draw.ArrowRight
-		if yield.Bound == oedometer.AtMost {
-			shape = draw.ArrowLeft
-		}
-		s.stripLine(y, s.yieldWords(), "", bold(s.f.small), yield.Best, yield.Best, yield.Best, draw.Marker{Shape: shape, Size: 2}, 0)
-	default:
-		s.c.Text(s.strip.Left+1, y, draw.Text(s.yieldWords()), bold(s.f.small))
+	behind := s.strip.Left+widest+4 > first
+	for _, r := range rows {
+		y += s.stripRow()
+		s.drawStripRow(r, y, behind)
+	}
+	if len(rows) == len(s.methods()) {
+		s.c.Text(s.strip.Left+1, y+s.stripRow(), draw.Text(s.yieldWords()), bold(s.f.small))
 	}
 	s.c.Rect(s.strip, draw.Pen{Width: draw.Thin}, draw.Fill{})
 }
 
-// stripLine draws one row of the strip: the name where there is room, the marker,
-// its bar, the figures, and the points that made it where there is room for them.
-func (s *curveSheet) stripLine(y float64, name, points string, f draw.Font, v, low, high float64, m draw.Marker, bar float64) {
-	if !finite(v) || !finite(low) || !finite(high) {
-		return
+// A stripRow is what one construction gives.
+type stripRow struct {
+	name, points     string
+	value, low, high float64
+	marker           draw.Marker
+	bar              float64 // width of the range's line, 0 for none
+	font             draw.Font
+}
+
+// stripRows lists the constructions that gave a value and, where there is one,
+// the result.
+func (s *curveSheet) stripRows() []stripRow {
+	var rows []stripRow
+	for _, m := range s.methods() {
+		r := stripRow{
+			name: s.letter(m) + "  " + m.Name, value: m.Stress, low: m.Stress, high: m.Stress,
+			marker: draw.Marker{Shape: draw.Circle, Solid: m.Used, Size: 1.8}, font: s.f.small,
+		}
+		if finite(m.Low) && finite(m.High) && m.Low > 0 && m.High > m.Low {
+			r.low, r.high, r.bar = m.Low, m.High, draw.Thin
+		}
+		if !m.Used {
+			r.name += " (not used)"
+		}
+		if n := numbers(m.Points); n != "" && len(s.points) <= mostNumbered {
+			r.points = ", points " + n
+		}
+		rows = append(rows, r)
 	}
-	x, _ := s.main.x.Clamp(v)
-	left, right := x, x
-	mid := y - f.Height()/2
-	if bar > 0 && high > low && low > 0 {
-		left, _ = s.main.x.Clamp(low)
-		right, _ = s.main.x.Clamp(high)
-		pen := draw.Pen{Width: bar}
+	y := s.r.Preconsolidation
+	if y.Bound == oedometer.Undetermined || !finite(y.Best) || y.Best <= 0 {
+		return rows
+	}
+	r := stripRow{name: "combined, 5 to 95 %", value: y.Best, low: y.Best, high: y.Best, marker: draw.Marker{Shape: draw.Square, Solid: true, Size: 2}, font: bold(s.f.small)}
+	switch y.Bound {
+	case oedometer.AtLeast:
+		r.name, r.marker.Shape = "bound: at least", draw.ArrowRight
+	case oedometer.AtMost:
+		r.name, r.marker.Shape = "bound: at most", draw.ArrowLeft
+	default:
+		if finite(y.Low) && finite(y.High) && y.Low > 0 && y.High > y.Low {
+			r.low, r.high, r.bar = y.Low, y.High, draw.Thick
+		}
+	}
+	return append(rows, r)
+}
+
+// drawStripRow draws one row of the strip: name, marker, bar, figures, and the
+// points that made it where there is room for them.
+func (s *curveSheet) drawStripRow(r stripRow, y float64, behind bool) {
+	x, _ := s.main.x.Clamp(r.value)
+	left, _ := s.main.x.Clamp(r.low)
+	right, _ := s.main.x.Clamp(r.high)
+	mid := y - r.font.Height()/2
+	if r.bar > 0 {
+		pen := draw.Pen{Width: r.bar}
 		s.c.Line(left, mid, right, mid, pen)
 		s.c.Line(left, mid-0.7, left, mid+0.7, pen)
 		s.c.Line(right, mid-0.7, right, mid+0.7, pen)
 	}
-	s.c.Marker(x, mid, m)
-	left, right = math.Min(left, x-1.2), math.Max(right, x+1.2)
-	figures := significant(v)
-	if bar > 0 && high > low {
-		figures += " (" + significant(low) + " to " + significant(high) + ")"
+	s.c.Marker(x, mid, r.marker)
+	reach := 1.2
+	if r.marker.Shape == draw.ArrowRight {
+		reach = 4
 	}
-	l := draw.Text(figures + points)
-	if s.strip.Right-right-3 < f.Width(l) {
-		l = draw.Text(figures)
+	left, right = math.Min(left, x-1.2), math.Max(right, x+reach)
+	figures := significant(r.value)
+	if r.bar > 0 {
+		figures += " (" + significant(r.low) + " to " + significant(r.high) + ")"
 	}
-	width := f.Width(l)
-	// Name on the left and figures on the right of the bar, or both on the side
-	// that has the room.
-	switch rest := s.strip.Right - right - 2; {
-	case m.Shape == draw.ArrowRight || m.Shape == draw.ArrowLeft:
-		s.c.Text(s.strip.Left+1, y, draw.Text(f.Fit(name, left-s.strip.Left-3)), f)
-	case rest >= width+1 && left-s.strip.Left > 40:
-		s.c.Text(s.strip.Left+1, y, draw.Text(f.Fit(name, left-s.strip.Left-3)), f)
-		s.c.Text(right+1.5, y, l, f)
-	case rest >= width+40:
-		s.c.Text(right+1.5, y, l, f)
-		s.c.Text(right+3.5+width, y, draw.Text(f.Fit(name, s.strip.Right-right-4.5-width)), f)
-	default:
-		s.c.Text(left-1.5, y, l, anchored(f, draw.End))
-		s.c.Text(s.strip.Left+1, y, draw.Text(f.Fit(name, left-s.strip.Left-4-width)), f)
+	name := r.name
+	if behind {
+		figures, name = figures+" · "+r.name, ""
 	}
+	room := s.strip.Right - right - 2.5
+	if full := figures + r.points; r.font.Width(draw.Text(full)) <= room {
+		figures = full
+	}
+	if width := r.font.Width(draw.Text(figures)); width > room && left-s.strip.Left > room {
+		s.c.Text(left-1.5, y, draw.Text(r.font.Fit(figures, left-s.strip.Left-3)), anchored(r.font, draw.End))
+	} else {
+		s.c.Text(right+1.5, y, draw.Text(r.font.Fit(figures, room)), r.font)
+	}
+	s.c.Text(s.strip.Left+1, y, draw.Text(name), r.font)
 }
 
 // numbers writes point numbers as short as they can be: 1–3, 5.

@@ -288,19 +288,22 @@ func (d *depthSheet) choosePanels() {
 		}
 	}
 	flags := len(d.in.Flags) > 0
-	strata := 27.0
-	if flags {
-		strata = 23
+	// The flags take their room from panels that can spare it.
+	tight := func(alone, beside float64) float64 {
+		if flags {
+			return beside
+		}
+		return alone
 	}
 	add(true, panel{title: draw.Text("Depth"), unit: draw.Text("(m)"), least: 9.6, share: 0.2, bare: true, draw: d.drawDepths})
-	add(true, panel{title: draw.Text("Strata"), unit: draw.Text("and water"), least: strata, share: 2, draw: d.drawStrata})
-	add(index, panel{title: draw.Text("Index tests"), unit: draw.Text("PL, LL, w (%)"), least: 23, share: 1.6, draw: d.drawIndex})
-	add(weight, panel{title: draw.Text("γ"), unit: draw.Text("(kN/m³)"), least: 13, share: 1.1, draw: d.drawWeight})
-	add(true, panel{title: draw.Text("Vertical stress"), unit: draw.Text("(kPa)"), least: 35, share: 4.5, draw: d.drawStress})
-	add(true, panel{title: draw.Text("OCR = ").Join(sigmaP).Add(" / ").Join(sigmaV), unit: draw.Text("(log scale)"), least: 29, share: 2.4, draw: d.drawRatio})
+	add(true, panel{title: draw.Text("Strata"), unit: draw.Text("and water"), least: 27, share: 2, draw: d.drawStrata})
+	add(index, panel{title: draw.Text("Index tests"), unit: draw.Text("PL, LL, w (%)"), least: tight(23, 21), share: 1.6, draw: d.drawIndex})
+	add(weight, panel{title: draw.Text("γ"), unit: draw.Text("(kN/m³)"), least: tight(13, 12), share: 1.1, draw: d.drawWeight})
+	add(true, panel{title: draw.Text("Vertical stress"), unit: draw.Text("(kPa)"), least: tight(35, 33), share: 4.5, draw: d.drawStress})
+	add(true, panel{title: draw.Text("OCR = ").Join(sigmaP).Add(" / ").Join(sigmaV), unit: draw.Text("(log scale)"), least: tight(29, 28), share: 2.4, draw: d.drawRatio})
 	add(len(d.in.Profile.Zones) > 0, panel{title: draw.Text("Zone"), unit: draw.Text("in words"), least: 25, share: 1.2, draw: d.drawZones})
-	add(compression, panel{title: draw.Text("C").Sub("c"), unit: draw.Text("(–)"), least: 14, share: 1.4, draw: d.drawCompression})
-	add(flags, panel{title: draw.Text("Flag"), least: 7, share: 0.3, draw: d.drawFlags})
+	add(compression, panel{title: draw.Text("C").Sub("c"), unit: draw.Text("(–)"), least: tight(14, 12.6), share: 1.4, draw: d.drawCompression})
+	add(flags, panel{title: draw.Text("Flag"), least: 6.4, share: 0.3, draw: d.drawFlags})
 	_, level := d.groundLevel()
 	add(level, panel{title: draw.Text("Level"), unit: draw.Text("(m)"), least: 9.4, share: 0.2, bare: true, draw: d.drawLevels})
 }

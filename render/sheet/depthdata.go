@@ -1,7 +1,6 @@
 package sheet
 
 import (
-	"fmt"
 	"math"
 	"sort"
 
@@ -48,7 +47,7 @@ func (d *depthSheet) drawIndex(p *panel) {
 		}
 		dot := draw.Marker{Shape: draw.Circle, Solid: true, Size: 1.3}
 		if w, ok := value(r.WaterContent); ok && w > high {
-			d.beyond(room, p.box.Right, y, dot, draw.Text(fmt.Sprintf("%.0f", w)))
+			d.beyond(room, p.box.Right, y, dot, draw.Text(decimals(w, 0)), plainMark)
 		} else if ok {
 			d.c.Marker(place(w), y, dot)
 		}
@@ -187,16 +186,20 @@ func capped(values []float64, least float64) float64 {
 // beyondRoom is how far from the edge of a panel a value beyond it is marked, mm.
 const beyondRoom = 5.2
 
+// The distance of a label from a mark, and from one with a ring, in mm.
+const plainMark, ringedMark = 1.7, 2.7
+
 // beyond marks a value that the axis does not reach: its own shape at the edge,
 // an arrow, and the value in figures.
-func (d *depthSheet) beyond(room *placer, edge, y float64, m draw.Marker, l draw.Label) {
+// The label keeps a distance from the mark.
+func (d *depthSheet) beyond(room *placer, edge, y float64, m draw.Marker, l draw.Label, distance float64) {
 	x := edge - beyondRoom
 	d.c.Marker(edge-3.5, y, draw.Marker{Shape: draw.ArrowRight, Size: 1.8})
 	if m.Shape != draw.ArrowRight {
 		d.c.Marker(x, y, m)
 	}
 	room.taken = append(room.taken, obstacle{draw.Box{Left: x - 1.2, Top: y - 1.2, Right: edge, Bottom: y + 1.2}, pointWeight})
-	room.around(d.c, x, y, 1.7, l, d.f.small)
+	room.around(d.c, x, y, distance, l, d.f.small)
 }
 
 // band draws a range of the points as a tint with edges; one without width is
@@ -242,22 +245,18 @@ func (d *depthSheet) band(of func(*profile.Point) profile.Range, s axis.Scale, e
 // give.
 func (d *depthSheet) drawCompression(p *panel) {
 	d.boundaries(p)
-	top := 0.1
+	var slopes []float64
 	for i := range d.in.Profile.Results {
 		r := &d.in.Profile.Results[i]
 		if v, ok := value(r.MeasuredCc); ok {
-			top = math.Max(top, v)
+			slopes = append(slopes, v)
 		}
 		if known(r.CorrelatedCc) {
-			top = math.Max(top, r.CorrelatedCc.High)
+			slopes = append(slopes, r.CorrelatedCc.Best)
 		}
 	}
-	for i := range d.in.Profile.Points {
-		if r := d.in.Profile.Points[i].CompressionIndex; known(r) {
-			top = math.Max(top, r.Best)
-		}
-	}
-	_, high, step := axis.Round(0, top, int(math.Max(2, p.box.Width()/8)))
+	_, high, step := axis.Round(0, capped(slopes, 0.1), int(math.Max(2, p.box.Width()/8)))
+	room := &placer{area: p.box.Inset(0.3)}
 	s := axis.NewLinear(0, high, p.box.Left, p.box.Right)
 	d.horizontal(p, s, steps(step)...)
 	grey := draw.Pen{Colour: draw.Grey, Width: draw.Hair}
@@ -268,13 +267,19 @@ func (d *depthSheet) drawCompression(p *panel) {
 		if known(r.CorrelatedCc) {
 			x1, _ := s.Clamp(r.CorrelatedCc.Low)
 			x2, _ := s.Clamp(r.CorrelatedCc.High)
-			best, _ := s.Clamp(r.CorrelatedCc.Best)
+			best, way := s.Clamp(r.CorrelatedCc.Best)
 			d.c.Line(x1, y, x2, y, draw.Pen{Colour: draw.Grey, Width: draw.Thick})
-			d.c.Marker(best, y, draw.Marker{Shape: draw.Tick, Colour: draw.Grey, Size: 1.5})
+			if way == 0 {
+				d.c.Marker(best, y, draw.Marker{Shape: draw.Tick, Colour: draw.Grey, Size: 1.5})
+			}
 		}
 		if v, ok := value(r.MeasuredCc); ok {
-			x, _ := s.Clamp(v)
-			d.c.Marker(x, y, draw.Marker{Shape: draw.Circle, Solid: true, Size: 1.5})
+			dot := draw.Marker{Shape: draw.Circle, Solid: true, Size: 1.5}
+			if x, way := s.Clamp(v); way > 0 {
+				d.beyond(room, p.box.Right, y, dot, draw.Text(decimals(v, 1)), plainMark)
+			} else {
+				d.c.Marker(x, y, dot)
+			}
 		}
 	}
 }

@@ -126,9 +126,9 @@ func (d *depthSheet) drawLevels(p *panel) {
 
 // drawStrata draws the log: a pattern, the name written beside it, and water.
 func (d *depthSheet) drawStrata(p *panel) {
-	column := math.Min(0.28*p.box.Width(), 12)
+	column := math.Min(0.27*p.box.Width(), 12)
 	log := draw.Box{Left: p.box.Left, Top: p.box.Top, Right: p.box.Left + column, Bottom: p.box.Bottom}
-	names := log.Right + 2.2
+	names := log.Right + 1.9
 	for _, s := range d.in.Borehole.Strata {
 		box := draw.Box{Left: log.Left, Top: d.y.At(s.Top), Right: log.Right, Bottom: d.y.At(s.Base)}
 		soil := s.Soil
@@ -155,9 +155,9 @@ func (d *depthSheet) waterNote(x, width float64) []note {
 	}
 	y := d.y.At(v)
 	d.waterMark(x, y)
-	text := "water " + metres(v) + " m"
+	text := "water " + metres(v) + "\u00a0m"
 	if v < 0 {
-		text = "water " + metres(-v) + " m above ground"
+		text = "water " + metres(-v) + "\u00a0m above ground"
 	}
 	return []note{{top: y - 0.1, base: y + 0.1, font: coloured(d.f.small, draw.Blue), rank: math.Inf(1),
 		lines: stacked(d.f.small.Wrap(text, width, 2))}}
@@ -221,7 +221,11 @@ func (d *depthSheet) strataNotes(width float64, most int) []note {
 		}
 		n.lines = stacked(d.f.small.Wrap(name, width, lines))
 		if most == 6 || n.base-n.top > n.height()+d.f.small.Line() {
-			n.lines = append(n.lines, draw.Text(metres(s.Top)+"–"+metres(s.Base)+" m"))
+			depths := draw.Text(metres(s.Top) + "–" + metres(s.Base) + " m")
+			if n.font.Width(depths) > width {
+				depths = draw.Text(metres(s.Top) + "–" + metres(s.Base))
+			}
+			n.lines = append(n.lines, depths)
 		}
 		if len(n.lines) > 0 {
 			notes = append(notes, n)

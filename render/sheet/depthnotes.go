@@ -32,7 +32,7 @@ func (d *depthSheet) notes() {
 	}
 	titleBlock(d.c, d.frame, d.in.Settings.Title, Figure{
 		Number: d.in.Figure, Sheet: d.in.Sheet, Of: d.in.Of,
-		Title: "Stress history with depth, borehole " + d.in.name(),
+		Title: "depth profile, borehole " + d.in.name(),
 		Scale: fmt.Sprintf("1:%.0f", d.scale), Paper: d.in.Page.Name,
 	})
 }
@@ -98,7 +98,7 @@ func (d *depthSheet) key() []keyItem {
 	add(seen["out"], keyItem{3, func(c *draw.Canvas, x, y float64) {
 		c.Marker(x, y, draw.Marker{Shape: draw.Circle})
 		c.Marker(x, y, draw.Marker{Shape: draw.Cross, Size: 3.2})
-	}, draw.Text("left out")})
+	}, draw.Text("left out or not used")})
 	add(seen["conflict"], keyItem{4, func(c *draw.Canvas, x, y float64) {
 		c.Circle(x, y, 1.8, draw.Pen{Colour: draw.Red, Width: draw.Thick}, draw.Fill{})
 	}, draw.Text("conflicts with the rest")})

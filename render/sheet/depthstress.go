@@ -177,6 +177,7 @@ func (d *depthSheet) tests(room *placer, s axis.Scale, of func(*profile.Test) (t
 		if _, e, ok := of(t); ok && known(e) && e.Best >= low && e.Best <= high {
 			x, y := s.At(e.Best), d.y.At(t.Depth)
 			d.c.Line(x, y-1.1, x, y+1.1, draw.Pen{Colour: draw.Grey, Width: draw.Thick})
+			room.point(x, y, 1)
 		}
 	}
 	type tag struct {
@@ -194,7 +195,11 @@ func (d *depthSheet) tests(room *placer, s axis.Scale, of func(*profile.Test) (t
 		x, way := s.Clamp(r.Best)
 		y := d.y.At(t.Depth)
 		if way > 0 {
-			d.beyond(room, s.At(high), y, d.mark(t), draw.Text(boundSign(t)+significant(r.Best)))
+			distance := plainMark
+			if t.Verdict == profile.Conflicts {
+				distance = ringedMark
+			}
+			d.beyond(room, s.At(high), y, d.mark(t), draw.Text(boundSign(t)+significant(r.Best)), distance)
 			x -= beyondRoom
 		} else {
 			if wide(r) {
@@ -223,7 +228,7 @@ func (d *depthSheet) tests(room *placer, s axis.Scale, of func(*profile.Test) (t
 		}
 	}
 	for _, g := range tags {
-		room.around(d.c, g.x, g.y, 2.7, draw.Text(d.f.small.Fit(g.l, 14)), g.font)
+		room.around(d.c, g.x, g.y, ringedMark, draw.Text(d.f.small.Fit(g.l, 14)), g.font)
 	}
 }
 

@@ -261,3 +261,12 @@ func uplifted() DepthInput {
 	in.Profile.Tests[0].Effective = profile.Known(-5)
 	return in
 }
+
+// layered has hundreds of strata, far more than can be named.
+func layered() DepthInput {
+	g := ground{name: "V1", water: 1, level: 7, spread: 1.2, ratio: func(float64) float64 { return 1.5 }}
+	for i := range 300 {
+		g.strata = append(g.strata, stratum(fmt.Sprintf("Varve %d", i), "silt", 0.05*float64(i), 0.05*float64(i+1), 18))
+	}
+	return DepthInput{Borehole: g.borehole(), Profile: g.profile(), Settings: settings(), Page: A4}
+}

@@ -3,6 +3,7 @@ package sheet
 import (
 	"fmt"
 	"strconv"
+	"strings"
 
 	"pastload/profile"
 	"pastload/render/draw"
@@ -76,7 +77,7 @@ func coloured(f draw.Font, c string) draw.Font {
 type Figure struct {
 	Number    string // figure number
 	Sheet, Of int    // sheet n of m; blank where 0
-	Title     string // used where the settings give none
+	Title     string // what this sheet shows, after the title that the settings give
 	Scale     string // drawing scale
 	Paper     string
 }
@@ -95,7 +96,9 @@ func titleBlock(c *draw.Canvas, frame draw.Box, t profile.TitleBlock, f Figure) 
 	box := draw.Box{Left: frame.Right - blockWidth, Top: frame.Bottom - blockHeight, Right: frame.Right, Bottom: frame.Bottom}
 	name := t.Title
 	if name == "" {
-		name = f.Title
+		name = strings.ToUpper(f.Title[:1]) + f.Title[1:]
+	} else {
+		name += ": " + f.Title
 	}
 	number := ""
 	switch {
@@ -112,7 +115,7 @@ func titleBlock(c *draw.Canvas, frame draw.Box, t profile.TitleBlock, f Figure) 
 		{{"Organisation", t.Organisation, 56}, {"Project", t.Project, 84}, {"Project number", t.Number, 44}},
 		{{"Client", t.Client, 56}, {"Location", t.Location, 84}, {"Datum, coordinates", joined(t.Datum, t.Coordinates), 44}},
 		{{"Title", name, 108}, {"Figure", f.Number, 32}, {"Sheet", number, 22}, {"Paper", f.Paper, 22}},
-		{{"Prepared", t.PreparedBy, 28}, {"Checked", t.CheckedBy, 28}, {"Approved", t.ApprovedBy, 28}, {"Date", t.Date, 24}, {"Status", t.Status, 32}, {"Revision", t.Revision, 22}, {"Scale", f.Scale, 22}},
+		{{"Prepared", t.PreparedBy, 26}, {"Checked", t.CheckedBy, 26}, {"Approved", t.ApprovedBy, 26}, {"Date", t.Date, 20}, {"Status", t.Status, 46}, {"Revision", t.Revision, 18}, {"Scale", f.Scale, 22}},
 	}
 	pen := draw.Pen{Width: draw.Medium}
 	label, entry := draw.Font{Size: 7, Colour: "#444444"}, draw.Font{Size: 8, Bold: true}
@@ -122,7 +125,11 @@ func titleBlock(c *draw.Canvas, frame draw.Box, t profile.TitleBlock, f Figure) 
 		for _, cell := range row {
 			c.Rect(draw.Box{Left: x, Top: y, Right: x + cell.width, Bottom: y + blockRow}, pen, draw.Fill{})
 			c.Text(x+0.8, y+2.6, draw.Text(cell.name), label)
-			c.Text(x+0.8, y+5.7, draw.Text(entry.Fit(cell.value, cell.width-1.6)), entry)
+			font := entry
+			if font.Width(draw.Text(cell.value)) > cell.width-1.6 {
+				font = draw.Font{Size: draw.SmallestPoints}
+			}
+			c.Text(x+0.8, y+5.7, draw.Text(font.Fit(cell.value, cell.width-1.6)), font)
 			x += cell.width
 		}
 		y += blockRow

@@ -22,7 +22,7 @@ var depthCases = []struct {
 	name string
 	make func() DepthInput
 }{
-	{"estuary", estuary}, {"flagged", flagged}, {"crowded", crowded}, {"shallow", shallow}, {"deep", deep}, {"uplifted", uplifted}, {"bare", bare},
+	{"estuary", estuary}, {"flagged", flagged}, {"crowded", crowded}, {"shallow", shallow}, {"deep", deep}, {"uplifted", uplifted}, {"bare", bare}, {"layered", layered},
 }
 
 // bare is a borehole of which nothing is known.
@@ -180,8 +180,8 @@ func TestDepthSays(t *testing.T) {
 		want   []string
 	}{
 		{"estuary", estuary(), "zones in words with their probability, water, names, the round scale, the doubtful test",
-			[]string{"overconsolidated", "P = 86 %", "P > 99 %", "water 1.20 m", "Soft estuarine", "Peat", "depth scale 1:100 at A4", "S6", "S8?", "2 of 5", "3.2", "≥ 500", "180"}},
-		{"deep", deep(), "water above ground, values beyond the axis", []string{"water 2.50 m above ground", "13440", "underconsolidated (suspected)"}},
+			[]string{"overconsolidated", "P = 86 %", "P > 99 %", "water 1.20\u00a0m", "Soft estuarine", "Peat", "depth scale 1:100 at A4", "S6", "S8?", "2 of 5", "3.2", "≥ 500", "180"}},
+		{"deep", deep(), "water above ground, values beyond the axis", []string{"water 2.50\u00a0m above ground", "13440", "underconsolidated (suspected)"}},
 		{"shallow", shallow(), "no test", []string{" is known", "no "}},
 		{"flagged", flagged(), "flags, assumptions where there is room", []string{"F1", "F4", "adopted"}},
 	}

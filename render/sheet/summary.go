@@ -57,7 +57,7 @@ func Summary(w io.Writer, in SummaryInput) error {
 	s.drawPanels()
 	s.caption.draw(s.c, s.captionBox.Left, s.captionBox.Top)
 	titleBlock(s.c, in.Page.frame(), in.Settings.Title, Figure{
-		Number: in.Figure, Sheet: in.Sheet, Of: in.Of, Title: "Summary by stratum", Scale: "–", Paper: in.Page.Name,
+		Number: in.Figure, Sheet: in.Sheet, Of: in.Of, Title: "summary by stratum", Scale: "–", Paper: in.Page.Name,
 	})
 	return s.c.Finish(w)
 }
@@ -281,7 +281,7 @@ func (s *summarySheet) layOut() {
 // allows up to what is pleasant. Strata that do not fit are left out, the last
 // first, and counted.
 func (s *summarySheet) shareRows(room float64) {
-	const least, most = 3.4, 16.0 // mm
+	const least, most = 3.4, 24.0 // mm
 	rows := func(pitch float64) float64 {
 		sum := 0.0
 		for i := range s.strata {
@@ -302,18 +302,37 @@ func (s *summarySheet) shareRows(room float64) {
 		st := &s.strata[i]
 		h := s.rowHeight(st, s.pitch)
 		st.box = draw.Box{Left: s.plot.Left, Top: y, Right: s.plot.Right, Bottom: y + h}
-		gap := (h - float64(len(st.lines))*s.pitch) / 2
+		gap := (h - st.height(s.pitch)) / 2
 		for j := range st.lines {
-			st.lines[j].top, st.lines[j].pitch = y+gap+float64(j)*s.pitch, s.pitch
+			l := &st.lines[j]
+			l.top, l.pitch = y+gap, l.height(s.pitch)
+			gap += l.pitch
 		}
 		y += h
 	}
 	s.plot.Bottom = y
 }
 
+// height is what a line takes, at most the pitch: a line with few things needs
+// less.
+func (l *summaryLine) height(pitch float64) float64 {
+	const one, more = 7.4, 2.8 // mm for the first thing and for each further one
+	n := max(len(l.tests), len(l.results), 1)
+	return math.Min(pitch, one+more*float64(n-1))
+}
+
+// height is what the lines of a stratum take.
+func (st *summaryStratum) height(pitch float64) float64 {
+	sum := 0.0
+	for i := range st.lines {
+		sum += st.lines[i].height(pitch)
+	}
+	return sum
+}
+
 // rowHeight is what a stratum needs for its lines and for its name.
 func (s *summarySheet) rowHeight(st *summaryStratum, pitch float64) float64 {
-	return math.Max(float64(len(st.lines))*pitch, float64(len(s.nameLines(st)))*s.f.small.Line()+2)
+	return math.Max(st.height(pitch), float64(len(s.nameLines(st)))*s.f.small.Line()+2)
 }
 
 // nameLines are the name of a stratum and its OCR in words.

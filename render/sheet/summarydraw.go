@@ -104,20 +104,25 @@ func (s *summarySheet) drawPanels() {
 }
 
 func (s *summarySheet) drawIndex() {
-	top := 10.0
+	least := 10.0
+	var contents []float64
 	s.each(func(l *summaryLine) {
 		for _, r := range l.results {
 			if r.Result == nil {
 				continue
 			}
-			for _, n := range []profile.Number{r.Result.WaterContent, r.Result.LiquidLimit, r.Result.PlasticLimit} {
+			for _, n := range []profile.Number{r.Result.LiquidLimit, r.Result.PlasticLimit} {
 				if v, ok := value(n); ok {
-					top = math.Max(top, v)
+					least = math.Max(least, v)
 				}
+			}
+			if v, ok := value(r.Result.WaterContent); ok {
+				contents = append(contents, v)
 			}
 		}
 	})
-	_, high, step := axis.Round(0, top, int(math.Max(3, s.index.Width()/9)))
+	_, high, step := axis.Round(0, capped(contents, least), int(math.Max(3, s.index.Width()/9)))
+	room := &placer{area: s.index.Inset(0.3)}
 	scale := axis.NewLinear(0, high, s.index.Left, s.index.Right)
 	s.axisAt(s.index, scale, steps(step)...)
 	s.each(func(l *summaryLine) {
@@ -138,11 +143,22 @@ func (s *summarySheet) drawIndex() {
 				s.c.Line(ends[0], y, ends[1], y, draw.Pen{Width: draw.Hair})
 			}
 			if v, ok := value(r.Result.WaterContent); ok {
-				x, _ := scale.Clamp(v)
-				s.c.Marker(x, y, boreholeMark(l.borehole))
+				s.mark(room, s.index, scale, v, y, l, decimals(v, 0))
 			}
 		}
 	})
+}
+
+// mark draws a value in the shape of its borehole, at the edge with an arrow and
+// in figures where the axis does not reach it.
+func (s *summarySheet) mark(room *placer, box draw.Box, scale axis.Scale, v, y float64, l *summaryLine, figures string) {
+	x, way := scale.Clamp(v)
+	if way > 0 {
+		d := depthSheet{c: s.c, f: s.f}
+		d.beyond(room, box.Right, y, boreholeMark(l.borehole), draw.Text(figures), plainMark)
+		return
+	}
+	s.c.Marker(x, y, boreholeMark(l.borehole))
 }
 
 func (s *summarySheet) drawStress() {
@@ -232,29 +248,29 @@ func (s *summarySheet) drawRatio() {
 }
 
 func (s *summarySheet) drawSlope() {
-	top := 0.1
+	least := 0.1
+	var slopes []float64
 	s.each(func(l *summaryLine) {
 		for _, r := range l.results {
 			if v, ok := value(r.MeasuredCc); ok {
-				top = math.Max(top, v)
+				slopes = append(slopes, v)
 			}
 			if known(r.CorrelatedCc) {
-				top = math.Max(top, r.CorrelatedCc.Best)
+				slopes = append(slopes, r.CorrelatedCc.Best)
 			}
 		}
 	})
-	_, high, step := axis.Round(0, top, int(math.Max(2, s.slope.Width()/8)))
+	_, high, step := axis.Round(0, capped(slopes, least), int(math.Max(2, s.slope.Width()/8)))
+	room := &placer{area: s.slope.Inset(0.3)}
 	scale := axis.NewLinear(0, high, s.slope.Left, s.slope.Right)
 	s.axisAt(s.slope, scale, steps(step)...)
 	s.each(func(l *summaryLine) {
 		for _, r := range l.results {
-			if known(r.CorrelatedCc) {
-				x, _ := scale.Clamp(r.CorrelatedCc.Best)
+			if x, way := scale.Clamp(r.CorrelatedCc.Best); known(r.CorrelatedCc) && way == 0 {
 				s.c.Marker(x, l.at(r.Depth), draw.Marker{Shape: draw.Tick, Colour: draw.Grey, Size: 1.8})
 			}
 			if v, ok := value(r.MeasuredCc); ok {
-				x, _ := scale.Clamp(v)
-				s.c.Marker(x, l.at(r.Depth), boreholeMark(l.borehole))
+				s.mark(room, s.slope, scale, v, l.at(r.Depth), l, decimals(v, 1))
 			}
 		}
 	})
