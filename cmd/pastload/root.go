@@ -91,6 +91,8 @@ names, or a single CSV of results with depth. Start with:
 		newYieldCommand(),
 		newDesignCommand(),
 		newReviewCommand(),
+		newDecideCommand(),
+		newExplainCommand(),
 	)
 	for _, c := range append(root.Commands(), root) {
 		c.Args = usageArgs(c.Args)

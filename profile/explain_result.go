@@ -1,0 +1,293 @@
+package profile
+
+import (
+	"fmt"
+	"math"
+	"slices"
+	"strings"
+
+	"pastload/correlate"
+)
+
+// results adds what was measured at the depth and what follows from it.
+func (x *explainer) results() {
+	for _, d := range nearest(x.result.Results, x.depth, func(d *DerivedResult) float64 { return d.Depth }) {
+		at := at(d.Depth, d.Specimen)
+		x.group = "Measured at " + at
+		x.measured(d.Result)
+		x.group = "Index properties at " + at
+		x.index(d)
+		x.group = "Correlations at " + at
+		x.correlations(d)
+	}
+}
+
+// nearest returns the entries at the depth or, where there is none, those of the
+// nearest depth within sameDepth.
+func nearest[T any](all []T, depth float64, of func(*T) float64) []*T {
+	least := sameDepth + closeDepth
+	for i := range all {
+		least = math.Min(least, math.Abs(of(&all[i])-depth))
+	}
+	var out []*T
+	for i := range all {
+		if d := math.Abs(of(&all[i]) - depth); d <= least+closeDepth && d <= sameDepth+closeDepth {
+			out = append(out, &all[i])
+		}
+	}
+	return out
+}
+
+// at names a depth with its specimen.
+func at(depth float64, specimen string) string {
+	text := digits(depth, 2) + " m"
+	if specimen != "" {
+		text += ", " + specimen
+	}
+	return text
+}
+
+// measured adds every cell of a row.
+func (x *explainer) measured(r *Result) {
+	for _, q := range Quantities {
+		n := *q.Of(r)
+		if n.Known {
+			x.add(Step{Key: q.Key, Name: q.Name + " " + q.Symbol, Numbers: converted(n), Value: n, Decimals: decimalsOf(n), Unit: q.Unit, Source: cited(n), Mark: assumedMark(n)})
+		}
+	}
+	row := r.Source.String()
+	if r.NonPlastic {
+		x.say("plastic limit", "non-plastic", row)
+	}
+	x.say("how the laboratory read σ′p", r.Method, row)
+	x.say("test", r.Test, row)
+	x.say("strength test", r.StrengthTest, row)
+	x.say("laboratory", r.Laboratory, row)
+	x.say("sampler", r.Sampler, row)
+	x.say("remark", r.Remark, row)
+}
+
+// decimalsOf returns as many decimals as were typed, or what seven significant
+// digits need where the number was converted.
+func decimalsOf(n Number) int {
+	if n.Source != nil && converted(n) == "" {
+		if _, after, ok := strings.Cut(strings.ReplaceAll(n.Source.Text, ",", "."), "."); ok {
+			return min(len(strings.TrimRight(after, " %")), 6)
+		}
+		return 0
+	}
+	_, after, _ := strings.Cut(significant(n.Value, 7), ".")
+	return min(len(strings.TrimRight(after, ")")), 6)
+}
+
+// index adds PI, LI, the void ratio and the degree of saturation with their
+// arithmetic.
+func (x *explainer) index(d *DerivedResult) {
+	r := d.Result
+	value := func(n Number) string { return significant(n.Value, 7) }
+	pi, pl := d.PlasticityIndex, r.PlasticLimit
+	if pi.Known && !r.PlasticityIndex.Known {
+		x.add(Step{Key: "plasticity_index_pct", Name: "plasticity index PI", Formula: "LL − PL", Numbers: value(r.LiquidLimit) + " − " + value(pl), Value: pi, Decimals: 2, Unit: "%", Mark: markDefinition})
+	}
+	if li := d.LiquidityIndex; li.Known && r.WaterContent.Known && pi.Known && pi.Value > 0 && (pl.Known || r.LiquidLimit.Known) {
+		if !pl.Known {
+			pl = Known(r.LiquidLimit.Value - pi.Value)
+			x.add(Step{Name: "plastic limit for LI", Formula: "LL − PI", Numbers: value(r.LiquidLimit) + " − " + value(pi), Value: pl, Decimals: 2, Unit: "%", Mark: markDefinition})
+		}
+		x.add(Step{Key: "liquidity_index", Name: "liquidity index LI", Formula: "(w − PL)/PI", Numbers: fmt.Sprintf("(%s − %s) / %s", value(r.WaterContent), value(pl), value(pi)), Value: li, Decimals: ratioDecimals, Mark: markDefinition})
+	}
+	w, gs := r.WaterContent, r.SpecificGravity
+	if !w.Known || !gs.Known {
+		return
+	}
+	if e := d.Result.VoidRatioOf(); !r.VoidRatio.Known {
+		x.add(Step{Key: "void_ratio", Name: "void ratio e0", Formula: "w·Gs/100, as for saturated soil", Numbers: value(w) + " × " + value(gs) + " / 100", Value: e, Decimals: ratioDecimals})
+		return
+	}
+	if d.DegreeSaturation.Known {
+		x.add(Step{Key: "degree_of_saturation", Name: "degree of saturation Sr", Formula: "w·Gs/(100·e0)", Numbers: fmt.Sprintf("%s × %s / (100 × %s)", value(w), value(gs), value(r.VoidRatio)), Value: d.DegreeSaturation, Decimals: ratioDecimals, Mark: markDefinition})
+	}
+}
+
+// correlations adds every correlation that was used at a result, and the band
+// that those for Cc make.
+func (x *explainer) correlations(d *DerivedResult) {
+	told := map[string]bool{} // derived inputs that have their step
+	for _, c := range d.Correlations {
+		entry, ok := correlate.ByID(c.ID)
+		if !ok {
+			continue
+		}
+		v := x.inputs(d, entry)
+		e, err := entry.Evaluate(v)
+		if err != nil {
+			continue
+		}
+		for _, u := range e.Used {
+			if u.Derived == "" || told[u.Symbol] {
+				continue
+			}
+			told[u.Symbol] = true
+			x.add(Step{Name: u.Name + " " + u.Written + " for the correlations", Formula: u.Derived, Numbers: filled(u.Derived, v, u.Value), Value: Known(u.Value), Decimals: ratioDecimals, Unit: u.Unit})
+		}
+		args := correlate.Values{}
+		for _, u := range e.Used {
+			args[u.Symbol] = u.Value
+		}
+		numbers := filled(entry.Formula, args, e.Value)
+		words := ""
+		if numbers == "" {
+			words = "with " + inputList(e.Used)
+		}
+		if len(e.Warnings) > 0 {
+			words = strings.Join(append([]string{words}, e.Warnings...), "; ")
+		}
+		x.add(Step{Name: entry.Quantity.Symbol() + " by " + entry.Name, Formula: entry.Formula, Numbers: numbers, Value: Known(e.Value), Words: strings.TrimPrefix(words, "; "),
+			Decimals: quantityDecimals(entry.Quantity), Unit: entry.Quantity.Unit(), Source: entry.Source, Mark: entry.Verified.String()})
+		if entry.Quantity == correlate.OverconsolidationRatio && d.Effective.Known {
+			x.add(Step{Name: "σ′p from it", Formula: "OCR·σ′v0", Numbers: term(e.Value, ratioDecimals) + " × " + term(d.Effective.Value, stressDecimals), Value: Known(e.Value * d.Effective.Value), Decimals: 1, Unit: "kPa", Mark: markDefinition})
+		}
+	}
+	x.band(d)
+}
+
+func quantityDecimals(q correlate.Quantity) int {
+	if q.Unit() == "kPa" {
+		return stressDecimals
+	}
+	return ratioDecimals
+}
+
+// inputs gathers what a correlation was given, as the profile gave it.
+func (x *explainer) inputs(d *DerivedResult, c correlate.Correlation) correlate.Values {
+	v := d.Result.values(d.Effective)
+	if c.Quantity != correlate.CompressionIndex {
+		return v
+	}
+	if s := x.borehole.StratumAt(d.Depth, d.Result.Stratum); s != nil && isOrganic(s) {
+		v["organic"] = max(v["organic"], peatOrganic)
+	}
+	delete(v, "Cc")
+	return v
+}
+
+func inputList(used []correlate.Used) string {
+	terms := make([]string, len(used))
+	for i, u := range used {
+		terms[i] = strings.TrimSpace(u.Written + " = " + significant(u.Value, 6) + " " + u.Unit)
+	}
+	return strings.Join(terms, ", ")
+}
+
+// band adds how the correlations for Cc are put together.
+func (x *explainer) band(d *DerivedResult) {
+	if !d.CorrelatedCc.Known {
+		return
+	}
+	v := x.inputs(d, correlate.Correlation{Quantity: correlate.CompressionIndex})
+	band, err := correlate.BandOf(correlate.CompressionIndex, v, x.site.Settings.correlationsFor(correlate.CompressionIndex))
+	if err != nil {
+		return
+	}
+	var logs, scatters, spreads []string
+	mean := math.Log(band.Best)
+	for _, m := range band.Members {
+		if !m.Speaks {
+			x.say(m.Correlation.Name+" is not counted", m.Why, "")
+			continue
+		}
+		logs = append(logs, "ln("+plain(m.Estimate.Value, 6)+")")
+		scatters = append(scatters, plain(m.Correlation.Scatter.Total(), 4)+"^2")
+		spreads = append(spreads, "("+sum("ln("+plain(m.Estimate.Value, 6)+")", minus(mean, 6))+")^2")
+	}
+	n := len(logs)
+	x.add(Step{Key: "correlated_compression_index", Name: "Cc, best of the correlations", Formula: "mean of ln Cc over the families", Numbers: fmt.Sprintf("exp((%s) / %d)", sum(logs...), n), Value: Known(band.Best), Decimals: ratioDecimals})
+	x.add(Step{Name: "standard deviation of ln Cc", Formula: "√(mean scatter² + variance of ln Cc)", Numbers: fmt.Sprintf("√((%s) / %d + (%s) / %d)", sum(scatters...), n, sum(spreads...), n), Value: Known(band.LnSD), Decimals: ratioDecimals})
+	low := fmt.Sprintf("%s × exp(−1.644854 × %s)", plain(band.Best, 6), plain(band.LnSD, 6))
+	x.add(Step{Key: "correlated_compression_index_low", Name: "Cc low of the correlations, 5 % point", Numbers: low, Value: Known(band.Low), Decimals: ratioDecimals})
+	x.add(Step{Key: "correlated_compression_index_high", Name: "Cc high of the correlations, 95 % point", Numbers: strings.Replace(low, "−1.644854", "1.644854", 1), Value: Known(band.High), Decimals: ratioDecimals})
+}
+
+// filled returns the right side of a formula with its numbers, but only where
+// the arithmetic so printed gives the value; "" where it does not, as of a
+// formula in words or with conditions.
+func filled(formula string, args correlate.Values, value float64) string {
+	_, right, ok := strings.Cut(formula, " = ")
+	if !ok {
+		right = formula
+	}
+	if i := strings.LastIndex(right, " = "); i >= 0 && !strings.ContainsAny(right[:i], ",;") {
+		right = right[i+3:] // CR = Cc/(1 + e0) = 0.126·…
+	}
+	if i := strings.IndexAny(right, ",;"); i >= 0 {
+		right = right[:i]
+	}
+	text := substitute(right, args)
+	got, err := Arithmetic(text)
+	if err != nil || math.Abs(got-value) > 1e-4*math.Abs(value) {
+		return ""
+	}
+	return text
+}
+
+// substitute puts numbers in the place of symbols, the longest names first.
+func substitute(formula string, args correlate.Values) string {
+	type name struct{ text, number string }
+	names := []name{{"pa", significant(correlate.Atmospheric, 7)}}
+	for _, v := range correlate.Variables() {
+		value, ok := args[v.Symbol]
+		if !ok {
+			continue
+		}
+		number := significant(value, 6)
+		for _, text := range append([]string{v.Written, v.Symbol}, otherNames[v.Symbol]...) {
+			names = append(names, name{text, number})
+		}
+	}
+	slices.SortStableFunc(names, func(a, b name) int { return len(b.text) - len(a.text) })
+	var out strings.Builder
+	for rest := formula; rest != ""; {
+		hit := slices.IndexFunc(names, func(n name) bool {
+			return strings.HasPrefix(rest, n.text) && !continues(out.String(), rest[len(n.text):])
+		})
+		if hit >= 0 {
+			out.WriteString(names[hit].number)
+			rest = rest[len(names[hit].text):]
+			continue
+		}
+		size := 1
+		for size < len(rest) && rest[size]&0xC0 == 0x80 {
+			size++
+		}
+		out.WriteString(rest[:size])
+		rest = rest[size:]
+	}
+	return out.String()
+}
+
+// otherNames are what formulas call a variable beside its symbol.
+var otherNames = map[string][]string{"w": {"w0"}, "N60": {"N"}, "su": {"su(mob)"}}
+
+// continues tells whether a name only looks like one, as part of a longer word.
+func continues(before, after string) bool {
+	letter := func(c byte) bool {
+		return c >= 'a' && c <= 'z' || c >= 'A' && c <= 'Z' || c >= '0' && c <= '9' || c >= 0x80
+	}
+	// The middle dot and the minus sign are letters of no word.
+	if strings.HasPrefix(after, "·") || strings.HasPrefix(after, "−") || strings.HasPrefix(after, "²") || strings.HasPrefix(after, "³") {
+		after = ""
+	}
+	if strings.HasSuffix(before, "·") || strings.HasSuffix(before, "−") || strings.HasSuffix(before, "√") {
+		before = ""
+	}
+	return after != "" && letter(after[0]) || before != "" && letter(before[len(before)-1])
+}
+
+// listed joins places, cutting long lists.
+func listed(places []string) string {
+	const most = 8
+	if len(places) > most {
+		return strings.Join(places[:most], ", ") + fmt.Sprintf(" and %d more", len(places)-most)
+	}
+	return strings.Join(places, ", ")
+}
