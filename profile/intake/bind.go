@@ -13,6 +13,7 @@ import (
 func (rd *reader) bind(g *grid, specs []spec) (fields []field, index map[string]int, sound bool) {
 	v := newVocabulary(specs)
 	index = map[string]int{}
+	rd.findHeader(g, specs, v)
 	header := g.header
 	report := func(i int, name, message, wanted string) {
 		rd.add(Problem{File: g.file, Line: header.lineOf(i), Column: i + 1, Name: name, Message: message, Wanted: wanted})
@@ -54,6 +55,38 @@ func (rd *reader) bind(g *grid, specs []spec) (fields []field, index map[string]
 		}
 	}
 	return fields, index, sound
+}
+
+// searched is how many lines a title above the table may take.
+const searched = 20
+
+// findHeader looks for the header further down where the first line is none. A
+// title above a table is reported once, and the table beneath it is read, so that
+// its own problems are told in the same run.
+func (rd *reader) findHeader(g *grid, specs []spec, v vocabulary) {
+	complete := func(r gridRow) bool {
+		have := map[int]bool{}
+		for i, h := range trimRight(r.fields) {
+			have[v.bindField(h, i+1).spec] = true
+		}
+		for i, s := range specs {
+			if s.required && !have[i] {
+				return false
+			}
+		}
+		return true
+	}
+	if complete(g.header) {
+		return
+	}
+	for i, r := range g.rows[:min(len(g.rows), searched)] {
+		if complete(r) {
+			rd.add(Problem{File: g.file, Line: g.header.line, Name: string(g.table),
+				Message: fmt.Sprintf("the header stands in line %d, beneath %d others", r.line, i+1), Wanted: "the header first, and nothing above it"})
+			g.header, g.rows = r, g.rows[i+1:]
+			return
+		}
+	}
 }
 
 // trimRight drops the empty fields that spreadsheets leave at the end.
@@ -223,50 +256,4 @@ func (rd *reader) checkWidths(g *grid, fields []field) []gridRow {
 		}
 	}
 	return kept
-}
-
-// A place is a cell of a file: line and field.
-type place struct{ line, column int }
-
-// decimalMark decides the decimal mark of a file from all its number cells, and
-// returns the cells that have been reported because they contradict it.
-func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []gridRow) (byte, map[place]bool) {
-	var c census
-	for _, r := range rows {
-		for i, f := range fields {
-			if f.spec < 0 || specs[f.spec].kind == textColumn || specs[f.spec].kind == dateColumn {
-				continue
-			}
-			text := r.field(i)
-			if !strings.ContainsAny(text, ".,'") {
-				continue
-			}
-			add := func(t token) {
-				if t.kind == aNumber {
-					c.add(numeral{line: r.lineOf(i), column: i + 1, name: specs[f.spec].name, text: clean(text), digits: t.digits})
-				}
-			}
-			if top, base, ok := depthRange(text); ok && specs[f.spec].ranges {
-				add(top)
-				add(base)
-				continue
-			}
-			add(scan(text))
-		}
-	}
-	mark, wrong, note := c.decide(rd.opt.Decimal)
-	if g.point {
-		// Number cells of a workbook have a point; a comma means text.
-		mark, wrong, note = '.', ask(c.grouped), ""
-	}
-	told := map[place]bool{}
-	for _, p := range wrong {
-		p.File = g.file
-		told[place{p.Line, p.Column}] = true
-		rd.add(p)
-	}
-	if note != "" {
-		rd.noteFile(g.file, note)
-	}
-	return mark, told
 }

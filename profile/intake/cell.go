@@ -36,12 +36,15 @@ func readNumber(s spec, f field, mark byte, cell *profile.Cell) (n, base profile
 		return n, base, false, fault(tok.why)
 	case tok.bound != profile.Exact && !s.bounds:
 		return n, base, false, fault("is a bound, not a value")
-	case tok.percent && f.unit.name != "%":
+	case tok.percent && s.dim != percent:
 		return n, base, false, fault("carries a percent sign in a column that is not in percent")
 	}
 	v, ok := tok.value(mark)
 	if !ok {
 		return n, base, false, fault("is not a number")
+	}
+	if tok.percent {
+		f.unit = percent.named("%") // the cell says so itself, whatever its header
 	}
 	n = s.inside(v, f, cell)
 	n.Bound, n.Assumed = tok.bound, tok.assumed

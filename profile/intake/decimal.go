@@ -37,7 +37,7 @@ func (t *tally) add(n numeral) {
 
 func (c *census) add(n numeral) {
 	// Nearly every number has one point and not three digits after it.
-	if i := strings.IndexByte(n.digits, '.'); i >= 0 && len(n.digits)-i != 4 && strings.IndexAny(n.digits[i+1:], "., '") < 0 && strings.IndexAny(n.digits[:i], ", '") < 0 {
+	if i := strings.IndexByte(n.digits, '.'); i >= 0 && len(n.digits)-i != 4 && !strings.ContainsAny(n.digits[i+1:], "., '") && !strings.ContainsAny(n.digits[:i], ", '") {
 		c.points.add(n)
 		return
 	}
@@ -100,4 +100,50 @@ func ask(t tally) (wrong []Problem) {
 			Wanted:  `numbers without a mark between thousands, or the decimal mark stated with --decimal "." or --decimal ","`})
 	}
 	return wrong
+}
+
+// A place is a cell of a file: line and field.
+type place struct{ line, column int }
+
+// decimalMark decides the decimal mark of a file from all its number cells, and
+// returns the cells that have been reported because they contradict it.
+func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []gridRow) (byte, map[place]bool) {
+	var c census
+	for _, r := range rows {
+		for i, f := range fields {
+			if f.spec < 0 || specs[f.spec].kind == textColumn || specs[f.spec].kind == dateColumn {
+				continue
+			}
+			text := r.field(i)
+			if !strings.ContainsAny(text, ".,'") {
+				continue
+			}
+			add := func(t token) {
+				if t.kind == aNumber {
+					c.add(numeral{line: r.lineOf(i), column: i + 1, name: specs[f.spec].name, text: clean(text), digits: t.digits})
+				}
+			}
+			if top, base, ok := depthRange(text); ok && specs[f.spec].ranges {
+				add(top)
+				add(base)
+				continue
+			}
+			add(scan(text))
+		}
+	}
+	mark, wrong, note := c.decide(rd.opt.Decimal)
+	if g.point {
+		// Number cells of a workbook have a point; a comma means text.
+		mark, wrong, note = '.', ask(c.grouped), ""
+	}
+	told := map[place]bool{}
+	for _, p := range wrong {
+		p.File = g.file
+		told[place{p.Line, p.Column}] = true
+		rd.add(p)
+	}
+	if note != "" {
+		rd.noteFile(g.file, note)
+	}
+	return mark, told
 }

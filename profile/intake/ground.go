@@ -15,7 +15,7 @@ const depthNames = "z; depth below ground level; depth below ground; depth bgl; 
 
 var boreholeColumns = []column[profile.Borehole]{
 	must(textOf("borehole", boreholeNames, "its name, unique in the site", func(b *profile.Borehole) *string { return &b.Name })),
-	numberOf("ground level", length, "m", within(-1000, 9000), "gl; elevation; ground elevation; surface level; surface elevation; reduced level; level", "above the site's datum", func(b *profile.Borehole) *profile.Number { return &b.GroundLevel }),
+	numberOf("ground level", level, "m", within(-1000, 9000), "gl; elevation; ground elevation; surface level; surface elevation; reduced level; level", "above the site's datum", func(b *profile.Borehole) *profile.Number { return &b.GroundLevel }),
 	numberOf("water table depth", length, "m", within(-100, 1000), waterTableNames, "below ground level; negative where water stands above ground", func(b *profile.Borehole) *profile.Number { return &b.WaterTableDepth }),
 	numberOf("capillary rise", length, "m", within(0, 50), "capillary zone", "height of saturated ground above the water table", func(b *profile.Borehole) *profile.Number { return &b.CapillaryRise }),
 	numberOf("surcharge", stress, "kPa", within(0, 10_000), "surface load; fill load", "wide and permanent load at ground level", func(b *profile.Borehole) *profile.Number { return &b.Surcharge }),
@@ -137,6 +137,7 @@ func (s *site) strata(g *grid) {
 	if t == nil {
 		return
 	}
+	s.strataTable = g.file
 	of := map[int][]row[layerRow]{}
 	for _, r := range t.rows {
 		i, ok := borehole(s, t, r, r.Value.Borehole)

@@ -147,7 +147,7 @@ func near(typed string, names []string) []string {
 	var found []scored
 	for _, n := range names {
 		d := distance(k, key(n))
-		if d <= max(1, min(len(k), 9)/3) {
+		if d <= max(1, min(len(k)+1, 9)/3) {
 			found = append(found, scored{n, d})
 		}
 	}

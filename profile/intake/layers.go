@@ -20,15 +20,18 @@ func (s *site) layers() {
 		if deepest <= 0 {
 			continue
 		}
+		if s.strataTable != "" {
+			s.rd.note(s.strataTable, b.Name+" has no layer in the strata table")
+		}
 		b.Strata = named(b.Results, deepest)
 		if len(b.Strata) == 0 {
 			b.Strata = []profile.Stratum{{Base: deepest}}
 			continue
 		}
 		if len(b.Strata) > 1 {
-			s.rd.note(b.Name, "no strata table: layers are taken from the strata that the results name, with boundaries half-way between their depths")
+			s.rd.note(b.Name, "layers are taken from the strata that the results name, with boundaries half-way between their depths")
 		} else {
-			s.rd.note(b.Name, "no strata table: the one stratum that the results name is taken from ground level to the deepest observation")
+			s.rd.note(b.Name, "the one stratum that the results name is taken from ground level to the deepest observation")
 		}
 	}
 }

@@ -117,6 +117,7 @@ func load[T any](rd *reader, g *grid, columns []column[T]) *table[T] {
 			titles[i] = t.specs[f.spec].name
 		}
 	}
+	rd.countRows(g)
 	rows := rd.checkWidths(g, t.fields)
 	var records []record
 	if err := gocsv.UnmarshalCSV(&tableReader{titles: titles, rows: rows}, &records); err != nil {
@@ -154,7 +155,7 @@ func fill[T any](rd *reader, g *grid, c column[T], f field, mark byte, cell *pro
 	}
 	if c.kind != numberColumn {
 		text := clean(cell.Text)
-		if missing(text) {
+		if blankText(text) {
 			text = ""
 		}
 		if c.kind == dateColumn && g.sheet {

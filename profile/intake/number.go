@@ -75,6 +75,16 @@ func missing(s string) bool {
 	return false
 }
 
+// blankText tells whether a cell of words holds none. Here "NM" can be somebody's
+// initials.
+func blankText(s string) bool {
+	switch s {
+	case "", "-", "–", "—", "n/a", "N/A":
+		return true
+	}
+	return false
+}
+
 // scan takes the text of a cell apart.
 func scan(text string) token {
 	s := clean(text)

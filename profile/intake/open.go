@@ -110,7 +110,6 @@ func (rd *reader) openFile(fsys fs.FS, name string, t Table) *grid {
 	}
 	before := len(rd.problems)
 	g := rd.parse(name, t, text)
-	rd.files[len(rd.files)-1].Rows = len(g.rows)
 	if g.header.fields == nil {
 		if len(rd.problems) == before {
 			rd.add(Problem{File: name, Name: string(t), Message: "the file is empty", Wanted: "a header line with the columns " + requiredColumns(t)})

@@ -111,6 +111,15 @@ func base(path string) string {
 	return filepath.Base(path)
 }
 
+// countRows records how many rows a table has beneath its header and units.
+func (rd *reader) countRows(g *grid) {
+	for i := range rd.files {
+		if rd.files[i].Name == g.file {
+			rd.files[i].Rows = len(g.rows)
+		}
+	}
+}
+
 // needed reports tables that the caller needs and that hold nothing.
 func (rd *reader) needed(name string, grids map[Table]*grid) {
 	if len(rd.problems) > 0 && len(grids) == 0 {

@@ -4,11 +4,13 @@ import (
 	"bytes"
 	"errors"
 	"fmt"
+	"io/fs"
 	"math"
 	"os"
 	"path/filepath"
 	"reflect"
 	"testing"
+	"testing/fstest"
 
 	"pastload/profile"
 )
@@ -61,10 +63,8 @@ func differAt(where string, a, b reflect.Value) string {
 type files map[string]string
 
 // write puts the files into a folder named "site" and returns its path.
-func (f files) write(t interface {
-	Fatal(...any)
-	TempDir() string
-}) string {
+func (f files) write(t *testing.T) string {
+	t.Helper()
 	dir := filepath.Join(t.TempDir(), "site")
 	if err := os.Mkdir(dir, 0o755); err != nil {
 		t.Fatal(err)
@@ -75,6 +75,15 @@ func (f files) write(t interface {
 		}
 	}
 	return dir
+}
+
+// fs returns the files as a file system.
+func (f files) fs() fs.FS {
+	m := fstest.MapFS{}
+	for name, data := range f {
+		m[name] = &fstest.MapFile{Data: []byte(data)}
+	}
+	return m
 }
 
 // mustRead reads the files and fails the test where they have problems.

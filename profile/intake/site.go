@@ -9,13 +9,14 @@ import (
 
 // A site is a profile.Site in the making.
 type site struct {
-	rd       *reader
-	out      profile.Site
-	single   bool           // one results file is all there is
-	declared bool           // a boreholes table says which boreholes exist
-	index    map[string]int // folded name → place in out.Boreholes
-	layered  map[int]bool   // the strata table has rows for the borehole
-	torn     map[int]bool   // some of those rows could not be used
+	rd          *reader
+	out         profile.Site
+	single      bool           // one results file is all there is
+	declared    bool           // a boreholes table says which boreholes exist
+	index       map[string]int // folded name → place in out.Boreholes
+	strataTable string         // its file, "" where there is none
+	layered     map[int]bool   // the strata table has rows for the borehole
+	torn        map[int]bool   // some of those rows could not be used
 }
 
 // build turns grids into the site, table by table: what others refer to comes

@@ -43,6 +43,14 @@ var (
 		{"cm", "centimetres", "2.00", 1e-2, "centimetre centimetres", ""},
 		{"in", "inches", "0.79", inch, "inch inches", ""},
 	}}
+	// A level is a length above a datum: "mOD" tells it from a depth.
+	level = &dimension{"level", []unit{
+		{"m", "metres above the datum", "12.50", 1, "metre metres meter meters mOD mAOD mASL mRL mMSL", ""},
+		{"ft", "feet above the datum", "41.0", foot, "foot feet ' ftOD ftASL ftMSL", "international foot"},
+		{"mm", "millimetres above the datum", "12500", 1e-3, "", ""},
+		{"cm", "centimetres above the datum", "1250", 1e-2, "", ""},
+		{"in", "inches above the datum", "492", inch, "", ""},
+	}}
 	stress = &dimension{"stress", []unit{
 		{"kPa", "kilopascals", "125.0", 1, "kN/m2 kNm-2 kilopascal kilopascals", ""},
 		{"MPa", "megapascals", "0.125", 1e3, "MN/m2 N/mm2 megapascal megapascals", ""},
@@ -95,7 +103,7 @@ var (
 	}}
 )
 
-var dimensions = []*dimension{length, stress, unitWeight, percent, ratio, gravityRatio, velocity, consolidation, duration}
+var dimensions = []*dimension{length, level, stress, unitWeight, percent, ratio, gravityRatio, velocity, consolidation, duration}
 
 // unitKey folds the spellings of a unit: superscripts, dots, blanks, minus signs.
 func unitKey(s string) string {

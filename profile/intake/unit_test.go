@@ -55,7 +55,7 @@ func TestUnitSpellings(t *testing.T) {
 		{stress, "MPa", "MPa"}, {stress, "mpa", "MPa"}, {stress, "mPa", ""}, {stress, "MN/m2", "MPa"}, {stress, "mN/m2", ""},
 		{stress, "lb/ft²", "psf"}, {stress, "t/m²", "t/m2"}, {stress, "t/ft2", "tsf"}, {stress, "kip/ft²", "ksf"}, {stress, "m", ""}, {stress, "", ""},
 		{unitWeight, "kN/m³", "kN/m3"}, {unitWeight, "kN·m⁻³", "kN/m3"}, {unitWeight, "Mg/m3", "Mg/m3"}, {unitWeight, "mg/m3", ""}, {unitWeight, "lb/ft3", "pcf"}, {unitWeight, "g/cc", "g/cm3"},
-		{length, "Metres", "m"}, {length, "FT", "ft"}, {length, "mm", "mm"}, {length, "feet", "ft"}, {length, "yd", ""},
+		{length, "Metres", "m"}, {length, "FT", "ft"}, {length, "mOD", ""}, {level, "mOD", "m"}, {level, "m OD", "m"}, {level, "m bgl", ""}, {length, "m bgl", "m"}, {length, "mm", "mm"}, {length, "feet", "ft"}, {length, "yd", ""},
 		{percent, "%", "%"}, {percent, "pct", "%"}, {percent, "-", "decimal"},
 		{consolidation, "m²/yr", "m2/year"}, {consolidation, "ft²/day", "ft2/day"}, {duration, "minutes", "min"},
 	} {

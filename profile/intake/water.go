@@ -18,7 +18,7 @@ var waterColumns = []column[waterRow]{
 	must(textOf("borehole", boreholeNames, "", func(r *waterRow) *string { return &r.Borehole })),
 	must(numberOf("depth", length, "m", depthLimit, depthNames+"; tip depth; instrument depth", "of the instrument's tip", func(r *waterRow) *profile.Number { return &r.Depth })),
 	numberOf("pore pressure", stress, "kPa", within(-2000, 20_000), "u; u0; porewater pressure; pore water pressure; water pressure", "this or a head level", func(r *waterRow) *profile.Number { return &r.Pressure }),
-	numberOf("head level", length, "m", within(-2000, 9000), "head; piezometric level; piezometric head; water level; piezometric elevation", "level to which water rises, above the site's datum; this or a pore pressure", func(r *waterRow) *profile.Number { return &r.Head }),
+	numberOf("head level", level, "m", within(-2000, 9000), "head; piezometric level; piezometric head; water level; piezometric elevation", "level to which water rises, above the site's datum; this or a pore pressure", func(r *waterRow) *profile.Number { return &r.Head }),
 	dated(textOf("date", "date read; reading date", "kept as typed", func(r *waterRow) *string { return &r.Date })),
 	textOf("kind", "type; instrument; instrument type", "e.g. standpipe, vibrating wire", func(r *waterRow) *string { return &r.Kind }),
 	textOf("remark", remarkNames, "", func(r *waterRow) *string { return &r.Remark }),

@@ -5,6 +5,7 @@ import (
 	"errors"
 	"fmt"
 	"io/fs"
+	"strconv"
 	"strings"
 
 	"github.com/xuri/excelize/v2"
@@ -84,6 +85,12 @@ func (rd *reader) readSheet(f *excelize.File, sheet, file string, t Table) *grid
 		return nil
 	}
 	defer rows.Close()
+	displayed, err := f.Rows(sheet)
+	if err != nil {
+		rd.add(Problem{File: file, Name: string(t), Message: "the sheet cannot be read", Wanted: "a sheet of cells"})
+		return nil
+	}
+	defer displayed.Close()
 	hidden := 0
 	for line := 1; rows.Next(); line++ {
 		fields, err := rows.Columns(excelize.Options{RawCellValue: true})
@@ -94,6 +101,16 @@ func (rd *reader) readSheet(f *excelize.File, sheet, file string, t Table) *grid
 		if len(fields) > maxFields {
 			rd.add(Problem{File: file, Line: line, Name: string(t), Message: fmt.Sprintf("a row of %d columns", len(fields)), Wanted: fmt.Sprintf("at most %d", maxFields)})
 			break
+		}
+		if len(fields) > 0 && line > maxRows {
+			rd.add(Problem{File: file, Line: line, Name: string(t), Message: fmt.Sprintf("cells below row %d", maxRows), Wanted: "a table that ends above it"})
+			break
+		}
+		if displayed.Next() {
+			shown, err := displayed.Columns(excelize.Options{RawCellValue: false})
+			if err == nil {
+				asPercent(fields, shown)
+			}
 		}
 		if rows.GetRowOpts().Hidden && len(fields) > 0 {
 			hidden++
@@ -108,13 +125,27 @@ func (rd *reader) readSheet(f *excelize.File, sheet, file string, t Table) *grid
 	if merged, err := f.GetMergeCells(sheet, true); err == nil && len(merged) > 0 {
 		rd.noteFile(file, fmt.Sprintf("%d merged cells: each counts as its first cell, the others are blank", len(merged)))
 	}
-	rd.files[len(rd.files)-1].Rows = len(g.rows)
 	if g.header.fields == nil {
 		rd.add(Problem{File: file, Name: string(t), Message: "the sheet is empty", Wanted: "a header row with the columns " + requiredColumns(t)})
 		return nil
 	}
 	rd.uncalculated(f, sheet, g)
 	return g
+}
+
+// asPercent writes the cells that a sheet displays in percent as such: 45 % is
+// stored as 0.45, and beneath a header "w (%)" that would be a hundredth of what
+// everybody sees.
+func asPercent(stored, displayed []string) {
+	for i, s := range stored {
+		if i >= len(displayed) || !strings.HasSuffix(displayed[i], "%") || strings.HasSuffix(s, "%") {
+			continue
+		}
+		if v, err := strconv.ParseFloat(s, 64); err == nil {
+			// 15 digits are what a spreadsheet computes with and shows.
+			stored[i] = strconv.FormatFloat(v*100, 'g', 15, 64) + "%"
+		}
+	}
 }
 
 // uncalculated reports formulas whose value was never stored: they read as

@@ -151,6 +151,31 @@ func TestWorkbookDates(t *testing.T) {
 	}
 }
 
+// TestWorkbookPercent: a cell displayed as 45.5 % is 45.5 % and not 0.455 %,
+// whether its header asks for percent or for a fraction.
+func TestWorkbookPercent(t *testing.T) {
+	sheets := map[string][][]any{"results": {{"borehole", "depth (m)", "w (%)", "LL (decimal)", "PL (decimal)"}, {"BH1", 2, 0.455, 0.55, 0.25}, {"BH1", 3, 46, "57%", 0.26}}}
+	path := book(t, sheets, func(f *excelize.File) {
+		style, err := f.NewStyle(&excelize.Style{NumFmt: 10}) // 0.00%
+		if err != nil {
+			t.Fatal(err)
+		}
+		if err := f.SetCellStyle("results", "C2", "D2", style); err != nil {
+			t.Fatal(err)
+		}
+	})
+	site, err := Read(path, Options{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	for i, want := range [][3]float64{{45.5, 55, 25}, {46, 57, 26}} {
+		r := site.Boreholes[0].Results[i]
+		if got := [3]float64{r.WaterContent.Value, r.LiquidLimit.Value, r.PlasticLimit.Value}; got != want {
+			t.Errorf("row %d: %v, want %v", i+2, got, want)
+		}
+	}
+}
+
 func TestWorkbookRemarks(t *testing.T) {
 	path := book(t, plainBook(), func(f *excelize.File) {
 		for _, err := range []error{f.SetRowVisible("results", 3, false), f.SetSheetVisible("strata", false), f.MergeCell("results", "G2", "G3")} {
