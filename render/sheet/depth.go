@@ -156,6 +156,7 @@ type panel struct {
 	least       float64 // mm, enough on A4
 	share       float64 // of what is left over
 	bare        bool    // without a frame of its own
+	names       bool    // holds the names of the strata
 	draw        func(*panel)
 	box         draw.Box
 }
@@ -223,6 +224,8 @@ const (
 	headerHeight = 10.0
 	titleHeight  = 13.0
 	limitHeight  = 4.0 // below the panels, for the limits of the zones
+
+	manyStrata = 20 // from here on some names may not have room
 )
 
 // layOut shares the page out: header, panels, notes, title block.
@@ -236,6 +239,9 @@ func (d *depthSheet) layOut() {
 	}
 	d.caption = newCaption(d.f.small, d.captionBox.Width(), d.key(), d.paragraphs(), 3)
 	bottom := d.captionBox.Bottom - d.caption.height()
+	if len(d.in.Borehole.Strata) > manyStrata {
+		bottom -= d.f.small.Line() // to say that some have no room for their name
+	}
 	if page.wide {
 		bottom = math.Min(bottom, block.Top-1)
 	}
@@ -274,6 +280,12 @@ func (d *depthSheet) layOut() {
 		}
 		p.box = draw.Box{Left: x, Top: d.plot.Top, Right: x + width, Bottom: d.plot.Bottom}
 		x += width
+		if len(d.in.Borehole.Strata) > manyStrata && p.names {
+			if _, left := d.named(p); left > 0 {
+				d.unnamed = left
+				d.caption = newCaption(d.f.small, d.captionBox.Width(), d.key(), d.paragraphs(), 3)
+			}
+		}
 	}
 }
 
@@ -296,7 +308,7 @@ func (d *depthSheet) choosePanels() {
 		return alone
 	}
 	add(true, panel{title: draw.Text("Depth"), unit: draw.Text("(m)"), least: 9.6, share: 0.2, bare: true, draw: d.drawDepths})
-	add(true, panel{title: draw.Text("Strata"), unit: draw.Text("and water"), least: 27, share: 2, draw: d.drawStrata})
+	add(true, panel{title: draw.Text("Strata"), unit: draw.Text("and water"), least: 27, share: 2, names: true, draw: d.drawStrata})
 	add(index, panel{title: draw.Text("Index tests"), unit: draw.Text("PL, LL, w (%)"), least: tight(23, 21), share: 1.6, draw: d.drawIndex})
 	add(weight, panel{title: draw.Text("γ"), unit: draw.Text("(kN/m³)"), least: tight(13, 12), share: 1.1, draw: d.drawWeight})
 	add(true, panel{title: draw.Text("Vertical stress"), unit: draw.Text("(kPa)"), least: tight(35, 33), share: 4.5, draw: d.drawStress})

@@ -126,9 +126,7 @@ func (d *depthSheet) drawLevels(p *panel) {
 
 // drawStrata draws the log: a pattern, the name written beside it, and water.
 func (d *depthSheet) drawStrata(p *panel) {
-	column := math.Min(0.27*p.box.Width(), 12)
-	log := draw.Box{Left: p.box.Left, Top: p.box.Top, Right: p.box.Left + column, Bottom: p.box.Bottom}
-	names := log.Right + 1.9
+	log, names := strataColumns(p)
 	for _, s := range d.in.Borehole.Strata {
 		box := draw.Box{Left: log.Left, Top: d.y.At(s.Top), Right: log.Right, Bottom: d.y.At(s.Base)}
 		soil := s.Soil
@@ -139,22 +137,37 @@ func (d *depthSheet) drawStrata(p *panel) {
 		d.c.Hatch(box, first, second)
 		d.c.Rect(box, draw.Pen{Width: draw.Thin}, draw.Fill{})
 	}
-	width := p.box.Right - names - 0.5
-	extra := d.waterNote(log.Right-2.2, width)
-	placed, left := fullest(p.box, func(most int) []note { return append(d.strataNotes(width, most), extra...) })
-	d.unnamed = left
+	if v, ok := d.waterTable(); ok && v <= d.base {
+		d.waterMark(log.Right-2.2, d.y.At(v))
+	}
+	placed, _ := d.named(p)
 	d.rules(placed, log.Right, p.box.Right, d.strataTops(), draw.Pen{Colour: draw.Grey, Width: draw.Thin})
 	drawNotes(d.c, placed, log.Right, names)
 }
 
-// waterNote draws the water mark and returns the label that belongs to it.
-func (d *depthSheet) waterNote(x, width float64) []note {
+// strataColumns parts the panel into the log and where the names begin.
+func strataColumns(p *panel) (log draw.Box, names float64) {
+	column := math.Min(0.27*p.box.Width(), 12)
+	log = draw.Box{Left: p.box.Left, Top: p.box.Top, Right: p.box.Left + column, Bottom: p.box.Bottom}
+	return log, log.Right + 1.9
+}
+
+// named places the names of the strata and of the water table, and counts those
+// without room.
+func (d *depthSheet) named(p *panel) ([]note, int) {
+	_, names := strataColumns(p)
+	width := p.box.Right - names - 0.5
+	water := d.waterNote(width)
+	return fullest(p.box, func(most int) []note { return append(d.strataNotes(width, most), water...) })
+}
+
+// waterNote returns the label of the water table.
+func (d *depthSheet) waterNote(width float64) []note {
 	v, ok := d.waterTable()
 	if !ok || v > d.base {
 		return nil
 	}
 	y := d.y.At(v)
-	d.waterMark(x, y)
 	text := "water " + metres(v) + "\u00a0m"
 	if v < 0 {
 		text = "water " + metres(-v) + "\u00a0m above ground"
@@ -169,11 +182,7 @@ func fullest(box draw.Box, with func(most int) []note) (placed []note, left int)
 	const far = 14 // mm
 	for _, most := range []int{6, 4, 3, 2, 1} {
 		placed, left = spread(with(most), box.Top, box.Bottom)
-		moved := 0.0
-		for _, n := range placed {
-			moved = math.Max(moved, math.Max(n.top-n.y, n.y-n.base))
-		}
-		if left == 0 && moved < far {
+		if left == 0 && moved(placed) < far {
 			break
 		}
 	}
@@ -194,12 +203,16 @@ func (d *depthSheet) rules(notes []note, from, to float64, depths []float64, pen
 	}
 }
 
-// strataTops returns the depths of the boundaries between strata.
+// strataTops returns the depths of the boundaries between strata, as far as they
+// can be drawn apart.
 func (d *depthSheet) strataTops() []float64 {
+	const apart = 1.0 // mm; nearer boundaries would grey the panels
 	var tops []float64
+	last := math.Inf(-1)
 	for i, s := range d.in.Borehole.Strata {
-		if i > 0 {
+		if y := d.y.At(s.Top); i > 0 && y-last >= apart {
 			tops = append(tops, s.Top)
+			last = y
 		}
 	}
 	return tops
@@ -269,9 +282,11 @@ func steps(size float64) []axis.Ticker {
 func (d *depthSheet) horizontal(p *panel, s axis.Scale, tickers ...axis.Ticker) {
 	low, high := s.Ends()
 	var ticks []axis.Tick
+	var labels []tickLabel
 	for _, t := range tickers {
+		var room bool
 		ticks = t.Ticks(low, high)
-		if d.haveRoom(p, s, ticks) {
+		if labels, room = d.tickLabels(p, s, ticks); room {
 			break
 		}
 	}
@@ -285,29 +300,46 @@ func (d *depthSheet) horizontal(p *panel, s axis.Scale, tickers ...axis.Ticker) 
 		if x > p.box.Left+0.3 && x < p.box.Right-0.3 {
 			d.c.Line(x, p.box.Top, x, p.box.Bottom, draw.Pen{Colour: draw.Pale, Width: draw.Hair})
 		}
-		d.c.Text(d.tickPlace(p, s, t), p.box.Top-2, draw.Text(t.Label), anchored(d.f.small, draw.Middle))
+	}
+	for _, l := range labels {
+		d.c.Text(l.at, p.box.Top-2, draw.Text(l.text), anchored(d.f.small, draw.Middle))
 	}
 }
 
-// tickPlace returns the middle of a tick's label, which stays inside its panel.
-func (d *depthSheet) tickPlace(p *panel, s axis.Scale, t axis.Tick) float64 {
-	half := d.f.small.Width(draw.Text(t.Label))/2 + 0.8
-	return math.Max(p.box.Left+half, math.Min(p.box.Right-half, s.At(t.Value)))
+// A tickLabel is the text of a tick with its middle and half its width, in mm.
+type tickLabel struct {
+	text     string
+	at, half float64
+	shifted  bool // off its tick, to stay inside the panel
 }
 
-// haveRoom reports whether the labels of ticks stand clear of each other.
-func (d *depthSheet) haveRoom(p *panel, s axis.Scale, ticks []axis.Tick) bool {
-	edge := math.Inf(-1)
+// tickLabels places the labels of ticks inside their panel, and reports whether
+// they stand clear of each other. A label at an end that would touch its
+// neighbour is given up before the rest.
+func (d *depthSheet) tickLabels(p *panel, s axis.Scale, ticks []axis.Tick) ([]tickLabel, bool) {
+	const gap, edge = 0.7, 0.8 // mm, between labels and to the frame
+	var all []tickLabel
 	for _, t := range ticks {
 		if t.Label == "" {
 			continue
 		}
-		half := d.f.small.Width(draw.Text(t.Label)) / 2
-		at := d.tickPlace(p, s, t)
-		if at-half < edge+0.9 {
-			return false
-		}
-		edge = at + half
+		l := tickLabel{text: t.Label, half: d.f.small.Width(draw.Text(t.Label)) / 2}
+		x := s.At(t.Value)
+		l.at = math.Max(p.box.Left+l.half+edge, math.Min(p.box.Right-l.half-edge, x))
+		l.shifted = math.Abs(l.at-x) > 1e-9
+		all = append(all, l)
 	}
-	return true
+	touch := func(a, b tickLabel) bool { return a.at+a.half+gap > b.at-b.half }
+	if n := len(all); n > 2 && all[0].shifted && touch(all[0], all[1]) {
+		all = all[1:]
+	}
+	if n := len(all); n > 2 && all[n-1].shifted && touch(all[n-2], all[n-1]) {
+		all = all[:n-1]
+	}
+	for i := 1; i < len(all); i++ {
+		if touch(all[i-1], all[i]) {
+			return all, false
+		}
+	}
+	return all, true
 }

@@ -22,21 +22,43 @@ func (n note) height() float64 { return float64(len(n.lines))*n.font.Line() + 0.
 
 // spread gives each note a place between two heights: in order of depth, without
 // overlaps, as near to where they want to stand as least squares allows (pool
-// adjacent violators). Notes that do not fit at all are left out, the lowest
-// rank first; how many is returned.
+// adjacent violators). Where they do not all fit, those of the highest rank are
+// kept that can stand near their stretch; how many are left out is returned.
 func spread(notes []note, low, high float64) ([]note, int) {
-	kept := append([]note(nil), notes...)
-	left := 0
-	for total(kept) > high-low && len(kept) > 0 {
-		worst := 0
-		for i := range kept {
-			if kept[i].rank < kept[worst].rank {
-				worst = i
-			}
-		}
-		kept = append(kept[:worst], kept[worst+1:]...)
-		left++
+	if total(notes) <= high-low {
+		return arrange(notes, low, high), 0
 	}
+	const near = 4 // mm
+	order := make([]int, len(notes))
+	for i := range order {
+		order[i] = i
+	}
+	sort.SliceStable(order, func(a, b int) bool { return notes[order[a]].rank > notes[order[b]].rank })
+	var kept []note
+	for _, i := range order {
+		more := append(kept[:len(kept):len(kept)], notes[i])
+		if total(more) > high-low {
+			continue
+		}
+		if placed := arrange(more, low, high); moved(placed) <= near {
+			kept = placed
+		}
+	}
+	return kept, len(notes) - len(kept)
+}
+
+// moved returns the farthest that a note stands off its stretch, in mm.
+func moved(notes []note) float64 {
+	far := 0.0
+	for _, n := range notes {
+		far = math.Max(far, math.Max(n.top-n.y, n.y-n.base))
+	}
+	return far
+}
+
+// arrange places notes that fit between two heights.
+func arrange(notes []note, low, high float64) []note {
+	kept := append([]note(nil), notes...)
 	sort.SliceStable(kept, func(i, j int) bool { return kept[i].want() < kept[j].want() })
 	// A block of notes that touch moves as one; its place is the mean of what its
 	// members want, kept inside the ends.
@@ -70,7 +92,7 @@ func spread(notes []note, low, high float64) ([]note, int) {
 			y += kept[i].height()
 		}
 	}
-	return kept, left
+	return kept
 }
 
 func total(notes []note) float64 {

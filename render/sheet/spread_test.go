@@ -37,6 +37,9 @@ func TestSpread(t *testing.T) {
 		if edge > high+slack {
 			r.Fatalf("last label ends at %v, beyond %v", edge, high)
 		}
+		if left > 0 && moved(placed) > 4 {
+			r.Fatalf("labels were left out and one still stands %v mm off", moved(placed))
+		}
 		if total(notes) <= high-low && left > 0 {
 			r.Fatal("a label was left out although there is room")
 		}
