@@ -20,34 +20,20 @@ func (r *record) UnmarshalCSVWithFields(_, text string) error {
 	return nil
 }
 
-// tableReader hands a grid to gocsv under canonical column names, every row as
-// wide as the header.
+// tableReader hands a grid to gocsv under canonical column names, every row cut
+// to the width of the header.
 type tableReader struct {
 	titles []string
 	rows   []gridRow
-	next   int
 }
 
-// Read returns the titles and then one row after the other.
-func (t *tableReader) Read() ([]string, error) {
-	all, err := t.ReadAll()
-	if err != nil || t.next >= len(all) {
-		return nil, gocsv.ErrEmptyCSVFile
-	}
-	t.next++
-	return all[t.next-1], nil
-}
-
-// ReadAll returns the titles and all rows.
-func (t *tableReader) ReadAll() ([][]string, error) {
+// GetCSVRows returns the titles and all rows. Wider rows would make gocsv read
+// beyond its header.
+func (t tableReader) GetCSVRows() ([][]string, error) {
 	out := make([][]string, 0, len(t.rows)+1)
 	out = append(out, t.titles)
 	for _, r := range t.rows {
-		fields := r.fields
-		if len(fields) > len(t.titles) {
-			fields = fields[:len(t.titles)]
-		}
-		out = append(out, fields)
+		out = append(out, r.fields[:min(len(r.fields), len(t.titles))])
 	}
 	return out, nil
 }
@@ -120,7 +106,7 @@ func load[T any](rd *reader, g *grid, columns []column[T]) *table[T] {
 	rd.countRows(g)
 	rows := rd.checkWidths(g, t.fields)
 	var records []record
-	if err := gocsv.UnmarshalCSV(&tableReader{titles: titles, rows: rows}, &records); err != nil {
+	if err := gocsv.UnmarshalDecoder(tableReader{titles, rows}, &records); err != nil {
 		rd.add(Problem{File: g.file, Name: string(g.table), Message: err.Error(), Wanted: "a readable table"})
 		return t
 	}

@@ -2,6 +2,7 @@ package intake
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"pastload/profile"
@@ -30,9 +31,52 @@ func (s *site) build(grids map[Table]*grid) {
 	s.curves(grids[Oedometer])
 	s.soundings(grids[Cone])
 	s.layers()
+	s.matchSpecimens()
 	// These may name strata, which are known only now.
 	s.past(grids[History])
 	s.decisions(grids[Decisions])
+}
+
+// sameDepth is how far, in m, a specimen may lie outside the sample that it was
+// cut from and still be taken for it: half of a usual tube.
+const sameDepth = 0.3
+
+// matchSpecimens notes oedometer specimens that the results place elsewhere: one
+// of the two tables has a wrong name, or a wrong depth.
+func (s *site) matchSpecimens() {
+	type home struct {
+		borehole string
+		result   *profile.Result
+	}
+	homes := map[string][]home{}
+	for i := range s.out.Boreholes {
+		b := &s.out.Boreholes[i]
+		for j := range b.Results {
+			if name := strings.ToLower(b.Results[j].Specimen); name != "" {
+				homes[name] = append(homes[name], home{b.Name, &b.Results[j]})
+			}
+		}
+	}
+	for _, c := range s.out.Curves {
+		found := homes[strings.ToLower(c.Specimen)]
+		agrees := func(h home) bool {
+			r := h.result
+			return (c.Borehole == "" || h.borehole == c.Borehole) &&
+				(!c.Depth.Known || c.Depth.Value >= r.Depth.Value-sameDepth && c.Depth.Value <= r.DepthBase.Or(r.Depth.Value)+sameDepth)
+		}
+		if len(found) == 0 || slices.ContainsFunc(found, agrees) {
+			continue
+		}
+		r := found[0].result
+		var here []string
+		if c.Depth.Known {
+			here = append(here, "at "+metres(c.Depth)+" m")
+		}
+		if c.Borehole != "" {
+			here = append(here, "in "+c.Borehole)
+		}
+		s.rd.note(c.Source.String(), fmt.Sprintf("specimen %s is placed %s, the results (%s) place it at %s m in %s", c.Specimen, strings.Join(here, " "), r.Source, metres(r.Depth), found[0].borehole))
+	}
 }
 
 // indexOf returns the field of a column, or one beyond every row.

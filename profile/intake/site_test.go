@@ -119,6 +119,10 @@ func TestOedometerTable(t *testing.T) {
 	if cv := c.Stages[0].Consolidation.Value; math.Abs(cv-3.15576) > 1e-12 {
 		t.Errorf("cv %v m²/year, want 3.15576", cv)
 	}
+	long := mustRead(t, files{"oedometer.csv": "specimen,depth (m),σ' (kPa),strain (decimal)\nU3,4.00–4.50,25,0.012\n"}).Curves[0]
+	if long.Depth.Value != 4.25 || long.Stages[0].Strain.Value != 1.2 {
+		t.Errorf("depth %v, strain %v", long.Depth.Value, long.Stages[0].Strain.Value)
+	}
 	if k := site.Curves[1].TestKind; k != "constant rate of strain" {
 		t.Errorf("test kind %q", k)
 	}
@@ -171,6 +175,36 @@ func TestStratumDisagrees(t *testing.T) {
 	})
 	if len(site.Notes) != 1 || site.Notes[0] != (profile.Note{Where: "results.csv:2:2", Message: `the results place 2 m of BH1 in "clay", the strata table in "Crust"`}) {
 		t.Errorf("notes %q", site.Notes)
+	}
+}
+
+// TestSpecimenElsewhere: a specimen that two tables place apart is noted, one
+// cut from within its sample is not.
+func TestSpecimenElsewhere(t *testing.T) {
+	site := mustRead(t, files{
+		"results.csv":   "borehole,depth (m),specimen\nBH1,4.00–4.45,U1\nBH1,6.0,U2\nBH2,6.0,U3\n",
+		"oedometer.csv": "specimen,borehole,depth (m),effective stress (kPa),void ratio\nU1,BH1,4.3,25,1.2\nu2,BH1,5.0,25,1.2\nU3,BH1,,25,1.2\nU4,BH1,3,25,1.2\n",
+	})
+	want := []profile.Note{
+		{Where: "oedometer.csv:3:1", Message: "specimen u2 is placed at 5.0 m in BH1, the results (results.csv:3:2) place it at 6.0 m in BH1"},
+		{Where: "oedometer.csv:4:1", Message: "specimen U3 is placed in BH1, the results (results.csv:4:2) place it at 6.0 m in BH2"},
+	}
+	if !slices.Equal(site.Notes, want) {
+		t.Errorf("notes %q", site.Notes)
+	}
+}
+
+// TestBoreholeWithoutLayers: a strata table that forgets a borehole is noted.
+func TestBoreholeWithoutLayers(t *testing.T) {
+	site := mustRead(t, files{
+		"strata.csv":  "borehole,top (m),base (m),stratum\nBH1,0,9,Clay\n",
+		"results.csv": "borehole,depth (m)\nBH1,2\nBH2,2\n",
+	})
+	if want := []profile.Note{{Where: "strata.csv", Message: "BH2 has no layer in the strata table"}}; !slices.Equal(site.Notes, want) {
+		t.Errorf("notes %q", site.Notes)
+	}
+	if s := site.Boreholes[1].Strata; len(s) != 1 || s[0].Name != "" || s[0].Base != 2 {
+		t.Errorf("%+v", s)
 	}
 }
 
