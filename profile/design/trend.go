@@ -139,6 +139,27 @@ func (l DepthLine) SlopeAt(depth float64) float64 {
 	return l.Slope
 }
 
+// carrier returns the value that a line rests on: the one without which the slope is
+// least of what it is with it, if that is less than half. ok is false where no value
+// carries so much, or where there are too many for one to do so. slope is that
+// without the value, on the working scale.
+func carrier(s Sample, d Distribution) (o Observation, slope float64, ok bool) {
+	const most = 50
+	whole, err := FitLine(s, d)
+	if err != nil || len(s) < fewValues || len(s) > most {
+		return Observation{}, 0, false
+	}
+	s = s.ordered()
+	least := 0.5
+	for i := range s {
+		l, err := FitLine(append(append(Sample(nil), s[:i]...), s[i+1:]...), d)
+		if err == nil && l.Slope/whole.Slope < least {
+			o, slope, ok, least = s[i], l.Slope, true, l.Slope/whole.Slope
+		}
+	}
+	return o, slope, ok
+}
+
 // change returns how much the line changes over the tested depths, as a share of
 // its value at their middle; infinite where that is zero.
 func (l DepthLine) change() float64 {

@@ -172,3 +172,21 @@ func TestAverageLiesBetween(t *testing.T) {
 		t.Error("no average among the alternatives")
 	}
 }
+
+// TestTrendOnOneValue: a slope that one wild value makes is told as such.
+func TestTrendOnOneValue(t *testing.T) {
+	p := clay()
+	for i := range p.Site.Boreholes {
+		for j := range p.Site.Boreholes[i].Results {
+			p.Site.Boreholes[i].Results[j].RecompressionIndex = profile.Known(0.05 + 0.001*float64(j) + 0.002*float64((3*i+j*7)%4))
+		}
+	}
+	p.Site.Boreholes[1].Results[5].RecompressionIndex = profile.Known(0.1)
+	cr := find(t, values4(t, Options{}, p), "Soft clay", "", "recompression index")
+	if !cr.Trend.Used || !warned(cr, "The trend rests on one value, 0.100 of BH2-6 at 9.50 m") {
+		t.Errorf("used %v (p = %.3f), warnings %q", cr.Trend.Used, cr.Trend.P, cr.Warnings)
+	}
+	if _, _, ok := carrier(vertical(10, 13, 14, 17, 20, 21), Normal); ok {
+		t.Error("a steady slope rests on no single value")
+	}
+}

@@ -156,6 +156,10 @@ func (p *Parameter) warnTrend(e evaluation) {
 	if e.line.SD <= 1e-6*math.Abs(e.line.Mean) {
 		p.fact("The values lie on a line to the last digit: they look drawn and not measured, and their margin means nothing.")
 	}
+	if o, slope, ok := carrier(e.sample, e.line.Distribution); ok {
+		p.fact("The trend rests on one value, %s of %s at %.2f m: without it the slope is %s of what it is with it.",
+			quantityText(o.Value, p.Unit), o.Label, o.Depth, percent(slope/e.line.Slope))
+	}
 	if p.N < 6 {
 		p.fact("The trend rests on %d values only; six or more are to be preferred.", p.N)
 	}

@@ -37,6 +37,8 @@ func withUnit(text, unit string) string {
 	return text + " " + unit
 }
 
+func percent(share float64) string { return strconv.Itoa(int(math.Round(100*share))) + " %" }
+
 func metres(v float64) string { return strconv.FormatFloat(v, 'f', 2, 64) + " m" }
 
 // chance writes a chance without pretending to more than it knows.
