@@ -3,6 +3,7 @@ package history
 import (
 	"math"
 
+	"gonum.org/v1/gonum/floats"
 	"gonum.org/v1/gonum/mat"
 )
 
@@ -98,7 +99,12 @@ func (c *combination) parameters(n, p int) float64 {
 	return chol.LogDet()
 }
 
+// dot returns the inner product of a with the head of b.
 func dot(a, b []float64) float64 {
+	b = b[:len(a)]
+	if len(a) > 8 {
+		return floats.Dot(a, b)
+	}
 	sum := 0.0
 	for i, v := range a {
 		sum += v * b[i]

@@ -7,7 +7,7 @@ import "math"
 // The first was set where one test in a hundred that nobody touched is called
 // conflicting on natural clays.
 const (
-	conflictAt = 3.05
+	conflictAt = 3.15
 	doubtAt    = 2.0
 )
 

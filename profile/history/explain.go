@@ -13,7 +13,7 @@ import (
 const (
 	tellTests = 5
 	tellRatio = 1.5
-	tellShare = 0.6
+	tellShare = 0.75
 )
 
 // explain says how the layer got its history.

@@ -50,7 +50,7 @@ type mechanism struct {
 	name       string
 	prior      float64
 	parameters []parameter
-	response   func(g *ground, p []float64, depth, effective float64) float64
+	response   func(g *ground, p []float64) func(depth, effective float64) float64
 	reports    []reported // the first is the one to quote
 }
 
@@ -70,46 +70,55 @@ func newMechanisms() []mechanism {
 		{0, "POP", "kPa", exponentOf},
 	}
 	pop := logOf(50, 1.2, 9)
+	constantRatio := func(_ *ground, p []float64) func(z, s float64) float64 {
+		return func(_, s float64) float64 { return math.Log(s) + p[0] }
+	}
 	return []mechanism{
-		{NormallyConsolidated, 0.10, []parameter{{0.05, 0.08, 1}},
-			func(_ *ground, p []float64, _, s float64) float64 { return math.Log(s) + p[0] },
-			[]reported{{0, "OCR", "", exponentOf}}},
-		{RemovedOverburden, 0.20, []parameter{pop},
-			func(_ *ground, p []float64, _, s float64) float64 { return math.Log(s + math.Exp(p[0])) },
-			removed},
-		{Ageing, 0.20, []parameter{{0.40, 0.25, 1}},
-			func(_ *ground, p []float64, _, s float64) float64 { return math.Log(s) + p[0] },
-			[]reported{{0, "OCR", "", exponentOf}}},
-		{RemovedAndAged, 0.15, []parameter{pop, {0.25, 0.12, 1}},
-			func(_ *ground, p []float64, _, s float64) float64 { return math.Log(s+math.Exp(p[0])) + p[1] },
-			append(append([]reported(nil), removed...), reported{1, "OCR of ageing", "", exponentOf})},
-		{DriedCrust, 0.15, []parameter{logOf(80, 0.9, 4), logOf(1.5, 0.5, 3), {0.30, 0.25, 1}},
-			func(g *ground, p []float64, z, s float64) float64 {
-				return math.Log(s*math.Exp(p[2]) + math.Exp(p[0]-(z-g.top)/math.Exp(p[1])))
-			},
-			[]reported{{0, "added stress at the top", "kPa", exponentOf},
+		{NormallyConsolidated, 0.10, []parameter{{0.05, 0.08, 1}}, constantRatio, []reported{{0, "OCR", "", exponentOf}}},
+		{RemovedOverburden, 0.18, []parameter{pop},
+			func(_ *ground, p []float64) func(z, s float64) float64 {
+				pop := math.Exp(p[0])
+				return func(_, s float64) float64 { return math.Log(s + pop) }
+			}, removed},
+		{Ageing, 0.18, []parameter{{0.40, 0.25, 1}}, constantRatio, []reported{{0, "OCR", "", exponentOf}}},
+		{RemovedAndAged, 0.13, []parameter{pop, {0.25, 0.12, 1}},
+			func(_ *ground, p []float64) func(z, s float64) float64 {
+				pop, aged := math.Exp(p[0]), p[1]
+				return func(_, s float64) float64 { return math.Log(s+pop) + aged }
+			}, append(append([]reported(nil), removed...), reported{1, "OCR of ageing", "", exponentOf})},
+		{DriedCrust, 0.14, []parameter{logOf(80, 0.9, 4), logOf(1.5, 0.5, 3), {0.30, 0.25, 1}},
+			func(g *ground, p []float64) func(z, s float64) float64 {
+				added, length, below := math.Exp(p[0]), math.Exp(p[1]), math.Exp(p[2])
+				return func(z, s float64) float64 { return math.Log(s*below + added*math.Exp(-(z-g.top)/length)) }
+			}, []reported{{0, "added stress at the top", "kPa", exponentOf},
 				{1, "depth in which it falls to 37 %", "m", exponentOf},
 				{2, "OCR below", "", exponentOf}}},
-		{FormerLowerWater, 0.10, []parameter{logOf(4, 0.7, 5)},
-			func(g *ground, p []float64, z, s float64) float64 {
-				return math.Log(s + g.gamma*math.Max(0, math.Min(z-g.water, math.Exp(p[0]))))
-			},
-			[]reported{{0, "drawdown", "m", exponentOf}}},
+		{FormerLowerWater, 0.09, []parameter{logOf(4, 0.7, 5)},
+			func(g *ground, p []float64) func(z, s float64) float64 {
+				drawdown := math.Exp(p[0])
+				return func(z, s float64) float64 {
+					return math.Log(s + g.gamma*math.Max(0, math.Min(z-g.water, drawdown)))
+				}
+			}, []reported{{0, "drawdown", "m", exponentOf}}},
 		{UnderDrainage, 0.05, []parameter{logOf(50, 0.8, 5)},
-			func(g *ground, p []float64, z, s float64) float64 { return math.Log(s + math.Exp(p[0])*g.inside(z)) },
-			[]reported{{0, "drawdown of the head at the base", "m", func(g *ground, p float64) float64 { return math.Exp(p) / g.gamma }},
+			func(g *ground, p []float64) func(z, s float64) float64 {
+				pop := math.Exp(p[0])
+				return func(z, s float64) float64 { return math.Log(s + pop*g.inside(z)) }
+			}, []reported{{0, "drawdown of the head at the base", "m", func(g *ground, p float64) float64 { return math.Exp(p) / g.gamma }},
 				{0, "POP at the base", "kPa", exponentOf}}},
-		{StillConsolidating, 0.05, []parameter{logOf(0.3, 0.4, 3)},
-			func(g *ground, p []float64, z, s float64) float64 {
-				x := g.inside(z)
-				return math.Log(s) + math.Log(1-4*x*(1-x)*math.Min(mostExcess, math.Exp(p[0])))
-			},
-			[]reported{{0, "excess pore pressure at mid-height over σ′v0", "", func(_ *ground, p float64) float64 { return math.Min(mostExcess, math.Exp(p)) }}}},
-		{Irregular, 0.10, []parameter{{0.45, 0.6, 1}, {0.5, 0.35, 1}},
-			func(_ *ground, p []float64, _, s float64) float64 {
-				return math.Log(atmosphere) + p[0] + p[1]*math.Log(s/atmosphere)
-			},
-			[]reported{{0, "OCR where σ′v0 is 100 kPa", "", exponentOf},
+		{StillConsolidating, 0.04, []parameter{logOf(0.3, 0.4, 3)},
+			func(g *ground, p []float64) func(z, s float64) float64 {
+				excess := math.Min(mostExcess, math.Exp(p[0]))
+				return func(z, s float64) float64 {
+					x := g.inside(z)
+					return math.Log(s * (1 - 4*x*(1-x)*excess))
+				}
+			}, []reported{{0, "excess pore pressure at mid-height over σ′v0", "", func(_ *ground, p float64) float64 { return math.Min(mostExcess, math.Exp(p)) }}}},
+		{Irregular, 0.09, []parameter{{0.45, 0.6, 1}, {0.5, 0.35, 1}},
+			func(_ *ground, p []float64) func(z, s float64) float64 {
+				at, power := math.Log(atmosphere)+p[0], p[1]
+				return func(_, s float64) float64 { return at + power*math.Log(s/atmosphere) }
+			}, []reported{{0, "OCR where σ′v0 is 100 kPa", "", exponentOf},
 				{1, "power of σ′v0 that σ′p follows", "", func(_ *ground, p float64) float64 { return p }}}},
 	}
 }

@@ -95,8 +95,9 @@ func (n *node) line(m *mechanism, g *ground, depth, stress []float64) line {
 	}
 	evaluate := func() []float64 {
 		v := make([]float64, len(depth))
+		response := m.response(g, p)
 		for i, z := range depth {
-			v[i] = m.response(g, p, z, stress[i])
+			v[i] = response(z, stress[i])
 		}
 		return v
 	}

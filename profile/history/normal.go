@@ -97,7 +97,8 @@ func (m *mixture) at(p float64) float64 {
 		if !(next > low && next < high) {
 			next = 0.5 * (low + high)
 		}
-		if math.Abs(next-x) < 1e-10 {
+		// The step that follows a small one is its square.
+		if math.Abs(next-x) < 1e-7*sd {
 			return next
 		}
 		x = next

@@ -55,18 +55,15 @@ func (in *Input) point(i int, m *mixture) Point {
 		return p
 	}
 	p.HasOCR = true
-	ratio := m.shifted(-math.Log(s.EffectiveStress), s.LnSD)
-	if s.LnSD == 0 {
-		p.OCR = exponential(Band{b.Low - math.Log(s.EffectiveStress), b.Best - math.Log(s.EffectiveStress), b.High - math.Log(s.EffectiveStress)})
-	} else {
-		p.OCR = exponential(ratio.band())
-	}
-	// POP: the two sides of the band and the error of σ′v0 as root sum of squares.
-	spread := 1.645 * s.EffectiveStress * s.LnSD
+	// The two sides of the band and the error of σ′v0 as root sum of squares.
+	spread := 1.645 * s.LnSD
+	best := b.Best - math.Log(s.EffectiveStress)
+	p.OCR = exponential(Band{best - math.Hypot(b.Best-b.Low, spread), best, best + math.Hypot(b.High-b.Best, spread)})
 	q := p.Preconsolidation
 	p.POP.Best = q.Best - s.EffectiveStress
-	p.POP.Low = p.POP.Best - math.Hypot(q.Best-q.Low, spread)
-	p.POP.High = p.POP.Best + math.Hypot(q.High-q.Best, spread)
+	p.POP.Low = p.POP.Best - math.Hypot(q.Best-q.Low, spread*s.EffectiveStress)
+	p.POP.High = p.POP.Best + math.Hypot(q.High-q.Best, spread*s.EffectiveStress)
+	ratio := m.shifted(-math.Log(s.EffectiveStress), s.LnSD)
 	last := 0.0
 	for z, limit := range in.Limits {
 		below := ratio.below(math.Log(limit))

@@ -5,26 +5,31 @@ import (
 	"sync"
 )
 
-// A tally sums weighted moments whose weights are given by their logarithms.
-type tally struct{ top, weight, mean, square float64 }
+// A tally sums weighted moments. Weights are factor·e^log; the largest log so
+// far is taken out of them.
+type tally struct {
+	started                   bool
+	top, weight, mean, square float64
+}
 
-func (t *tally) add(log, mean, square float64) {
+func (t *tally) add(log, factor, mean, variance float64) {
 	switch d := log - t.top; {
-	case t.weight == 0 || d > 0:
-		scale := 0.0
-		if t.weight > 0 {
-			scale = math.Exp(-d)
+	case !t.started || d > 0:
+		if t.started {
+			scale := math.Exp(-d)
+			t.weight *= scale
+			t.mean *= scale
+			t.square *= scale
 		}
-		t.top = log
-		t.weight = t.weight*scale + 1
-		t.mean = t.mean*scale + mean
-		t.square = t.square*scale + square
+		t.started, t.top = true, log
 	case d > negligible:
-		w := math.Exp(d)
-		t.weight += w
-		t.mean += w * mean
-		t.square += w * square
+		factor *= math.Exp(d)
+	default:
+		return
 	}
+	t.weight += factor
+	t.mean += factor * mean
+	t.square += factor * (variance + mean*mean)
 }
 
 // fitted is a node under one setting after the wild sets are summed.
@@ -58,7 +63,7 @@ type posterior struct {
 const smallestGroup = 1e-4
 
 // smallestNode is the weight below which a node under a setting is left out.
-const smallestNode = 1e-9
+const smallestNode = 1e-6
 
 // infer averages over all nodes, settings and wild sets. Settings are worked
 // side by side and summed in their order, so that the bytes do not change. It
@@ -101,8 +106,8 @@ func (m *model) fit(r *rows, sv solved) underSetting {
 			t := &u.expected[i][m.nodes[n].mechanism]
 			for x := range r.tests + 1 {
 				if s := &sets[x]; s.first != i {
-					mean, variance, log := c.without(r.tests, s, i, r.value[i])
-					t.add(log+prior, mean, variance+mean*mean)
+					mean, variance, log, factor := c.without(r.tests, s, i, r.value[i])
+					t.add(log+prior, factor, mean, variance)
 				}
 			}
 		}
@@ -190,14 +195,9 @@ func quadratic(g, q []float64) float64 {
 	n := len(g)
 	sum := 0.0
 	for i, v := range g {
-		row := q[i*n : i*n+n]
-		half := 0.5 * row[i] * v
-		for j := range i {
-			half += row[j] * g[j]
-		}
-		sum += 2 * v * half
+		sum += v * (0.5*q[i*n+i]*v + dot(g[:i], q[i*n:i*n+i]))
 	}
-	return sum
+	return 2 * sum
 }
 
 // expect forms the leave-one-out mixture of every test, one normal for each

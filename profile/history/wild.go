@@ -12,7 +12,7 @@ import "math"
 // It is exact; nothing is refitted.
 type wildSet struct {
 	first, second int     // rows; -1 where there is none
-	log           float64 // log likelihood, prior of the set included
+	log, factor   float64 // likelihood, prior of the set included: factor·e^log
 	g1, g2        float64
 	m11, m12, m22 float64 // M⁻¹
 }
@@ -22,13 +22,13 @@ type wildSet struct {
 // sum exact and short; three wild tests in one layer leave the scatter wide.
 func (c *combination) wildSets(tests int, k *constants, out []wildSet) []wildSet {
 	v := k.WildSD * k.WildSD
-	odds := math.Log(k.Wild / (1 - k.Wild))
-	out = append(out[:0], wildSet{first: -1, second: -1, log: c.log})
+	odds := k.Wild / (1 - k.Wild)
+	out = append(out[:0], wildSet{first: -1, second: -1, log: c.log, factor: 1})
 	for i := range tests {
 		m := c.precision[i*tests+i] + 1/v
 		g := c.alpha[i] / m
 		out = append(out, wildSet{first: i, second: -1, g1: g, m11: 1 / m,
-			log: c.log + odds + 0.5*c.alpha[i]*g - 0.5*math.Log(v*m)})
+			log: c.log + 0.5*c.alpha[i]*g, factor: odds / math.Sqrt(v*m)})
 	}
 	for i := range tests {
 		mi := c.precision[i*tests+i] + 1/v
@@ -40,7 +40,7 @@ func (c *combination) wildSets(tests int, k *constants, out []wildSet) []wildSet
 			g2 := (mi*c.alpha[j] - mij*c.alpha[i]) / det
 			out = append(out, wildSet{first: i, second: j, g1: g1, g2: g2,
 				m11: mj / det, m12: -mij / det, m22: mi / det,
-				log: c.log + 2*odds + 0.5*(c.alpha[i]*g1+c.alpha[j]*g2) - 0.5*math.Log(v*v*det)})
+				log: c.log + 0.5*(c.alpha[i]*g1+c.alpha[j]*g2), factor: odds * odds / (v * math.Sqrt(det))})
 		}
 	}
 	return out
@@ -48,9 +48,9 @@ func (c *combination) wildSets(tests int, k *constants, out []wildSet) []wildSet
 
 // without returns what the other rows say of a good test i when the set, which
 // holds at most one other test, is wild: mean and variance of its value, and
-// the log likelihood of the others. It follows from C⁻¹ alone: the mean is the
-// value less (C⁻¹residual)_i/(C⁻¹)_ii, the variance 1/(C⁻¹)_ii.
-func (c *combination) without(tests int, w *wildSet, i int, value float64) (mean, variance, log float64) {
+// the likelihood of the others as factor·e^log. It follows from C⁻¹ alone: the
+// mean is the value less (C⁻¹residual)_i/(C⁻¹)_ii, the variance 1/(C⁻¹)_ii.
+func (c *combination) without(tests int, w *wildSet, i int, value float64) (mean, variance, log, factor float64) {
 	p, a := c.precision[i*tests+i], c.alpha[i]
 	if w.first >= 0 {
 		pij := c.precision[i*tests+w.first]
@@ -59,7 +59,7 @@ func (c *combination) without(tests int, w *wildSet, i int, value float64) (mean
 	}
 	variance = 1 / p
 	d := a * variance
-	return value - d, variance, w.log + 0.5*d*a + 0.5*math.Log(2*math.Pi*variance)
+	return value - d, variance, w.log + 0.5*d*a, w.factor * math.Sqrt(2*math.Pi*variance)
 }
 
 // wildSum is the average over the wild sets of a combination.
@@ -71,7 +71,7 @@ type wildSum struct {
 }
 
 // negligible is the log ratio below which a term is not added to a sum.
-const negligible = -40.0
+const negligible = -30.0
 
 // sumWild averages over the sets.
 func sumWild(sets []wildSet, tests int) wildSum {
@@ -86,7 +86,7 @@ func sumWild(sets []wildSet, tests int) wildSum {
 		if s.log-top < negligible {
 			continue
 		}
-		w := math.Exp(s.log - top)
+		w := s.factor * math.Exp(s.log-top)
 		total += w
 		if s.first < 0 {
 			continue
