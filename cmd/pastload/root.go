@@ -93,6 +93,7 @@ names, or a single CSV of results with depth. Start with:
 		newReviewCommand(),
 		newDecideCommand(),
 		newExplainCommand(),
+		newVerifyCommand(),
 	)
 	for _, c := range append(root.Commands(), root) {
 		c.Args = usageArgs(c.Args)
