@@ -177,6 +177,10 @@ func disturbance(r *row, rule *Rule) (Finding, bool) {
 	return ofTest(r, rule, severity, q.Class, "class 1 or 2", message)
 }
 
+// leastFirst is a first load in kPa that no programme can be blamed for: near the
+// surface σ′v0 itself is that small.
+const leastFirst = 25.0
+
 func stressRange(r *row, rule *Rule) (Finding, bool) {
 	first, ok := firstStress(r.curve)
 	if !ok || !r.effective.Known || r.effective.Value <= 5 {
@@ -184,10 +188,10 @@ func stressRange(r *row, rule *Rule) (Finding, bool) {
 	}
 	sv := r.effective.Value
 	switch {
-	case first > sv:
+	case first > sv && first > leastFirst:
 		return ofTest(r, rule, Doubt, fixed(first, 0)+" kPa", "at most "+fixed(sv/2, 0)+" kPa",
 			fmt.Sprintf("The first load is %s kPa, above the present stress of %s kPa: the recompression line and the sample quality cannot be told.", fixed(first, 0), fixed(sv, 0)))
-	case first > 0.5*sv:
+	case first > 0.5*sv && first > leastFirst:
 		return ofTest(r, rule, Note, fixed(first, 0)+" kPa", "at most "+fixed(sv/2, 0)+" kPa",
 			fmt.Sprintf("The first load is %s kPa at a present stress of %s kPa: fewer than two loads lie clear below it.", fixed(first, 0), fixed(sv, 0)))
 	}

@@ -227,6 +227,9 @@ func (c *context) judgeWater(b *profile.Borehole, clues []waterClue) (Finding, b
 		f.Suggested = &Suggestion{Quantity: f.Quantity, Value: profile.Known(best.value), How: best.how, Makes: len(said)}
 	}
 	f.Impact = math.Min(1, math.Abs(best.value-now)/10)
+	name, to := b.Name, best.value
+	f.gain = 10 + gain // stresses come before what is measured against them
+	f.fix = func(s *profile.Site) { s.Borehole(name).WaterTableDepth = profile.Known(to) }
 	if s := b.WaterTableDepth.Source; s != nil {
 		f.Cells = []string{s.String()}
 	}
@@ -322,10 +325,25 @@ func (c *context) stratumWeight(b *profile.Borehole, s *profile.Stratum, g *grou
 		}
 	}
 	f.Impact = math.Min(1, math.Abs(given.Value-want)/want)
+	f.fix, f.gain = correctWeight(b, s, want), 20+math.Abs(z)
 	if given.Source != nil {
 		f.Cells = []string{given.Source.String()}
 	}
 	return f, true
+}
+
+// correctWeight puts measured weights in the place of those of a stratum.
+func correctWeight(b *profile.Borehole, s *profile.Stratum, want float64) correction {
+	name, index := b.Name, 0
+	for i := range b.Strata {
+		if &b.Strata[i] == s {
+			index = i
+		}
+	}
+	return func(site *profile.Site) {
+		t := &site.Borehole(name).Strata[index]
+		t.UnitWeight, t.SaturatedUnitWeight = profile.Known(want), profile.Known(want)
+	}
 }
 
 func verb(n int, one, many string) string {

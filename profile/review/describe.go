@@ -75,6 +75,9 @@ func (c *context) describe(r *row, rd *reading, hs []change, restored []int) Fin
 		f.Evidence = append(f.Evidence, capital(c.relations[i].say(r, rd.c[i]))+".")
 	}
 	f.with = append(f.with, h.vars...)
+	if h.slip.how != "" {
+		f.fix, f.gain = c.correctValues(r, h), h.gain
+	}
 	if h.slip.how != "" || isEntered(h.v) {
 		c.suggest(&f, r, h, len(restored))
 	}
@@ -99,7 +102,7 @@ func (c *context) suggest(f *Finding, r *row, h *change, makes int) {
 	}
 	how := ""
 	if h.slip.how != "" {
-		how = " (" + h.slip.how + ")"
+		how = " (" + strings.Join(append([]string{h.slip.how}, h.like...), ", or ") + ")"
 		f.Causes = putFirst(f.Causes, h.slip.how)
 		f.Wanted = h.v.text(h.slip.value)
 	} else {

@@ -70,6 +70,7 @@ type change struct {
 	pair  bool // two columns exchanged
 	gain  float64
 	other variable // of a pair
+	like  []string // other slips that come to nearly the same value
 }
 
 func (h *change) mask() uint64 { return maskOf(h.vars) }
@@ -114,6 +115,7 @@ func (c *context) hypotheses(r *row, rd *reading, broken []int) []change {
 			continue
 		}
 		var best change
+		var tried []change
 		try := func(s slip) {
 			h := change{v: v, slip: s, vars: []variable{v}, to: []float64{s.value}}
 			if s.joint {
@@ -126,12 +128,20 @@ func (c *context) hypotheses(r *row, rd *reading, broken []int) []change {
 			if h.gain > best.gain {
 				best = h
 			}
+			if s.how != "" && h.gain > 0 {
+				tried = append(tried, h)
+			}
 		}
 		for _, s := range slips(r, v) {
 			try(s)
 		}
 		for _, x := range c.roots(r, v, broken) {
 			try(slip{value: x, cost: costFree})
+		}
+		for i := range tried {
+			if t := &tried[i]; t.slip.how != best.slip.how && best.slip.how != "" && t.gain > best.gain-0.8 && math.Abs(math.Log(t.slip.value/best.slip.value)) < sameSlip {
+				best.like = append(best.like, t.slip.how)
+			}
 		}
 		keep(best)
 	}
@@ -147,6 +157,10 @@ func (c *context) hypotheses(r *row, rd *reading, broken []int) []change {
 	slices.SortStableFunc(out, func(a, b change) int { return cmp.Compare(b.gain, a.gain) })
 	return out
 }
+
+// sameSlip is how near, as a logarithm, two slips come to the same value: kgf/cm²
+// and bar, or t/m² and a decimal point.
+const sameSlip = 0.06
 
 // roots returns the values of a variable at which the broken relations, one by
 // one, agree, and means of them.

@@ -52,6 +52,8 @@ type Finding struct {
 	Cells     []string          `json:"cells,omitempty"` // file:line:column
 
 	with []variable // the quantities that the cause may lie in
+	gain float64    // of the cause, as minus a logarithm of odds
+	fix  correction // of a cause that bears on the stress history
 }
 
 // A Suggestion is the one change that would restore agreement.

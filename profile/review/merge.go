@@ -96,6 +96,9 @@ func (f *Finding) absorb(o *Finding) {
 	if o.Severity.Rank() > f.Severity.Rank() {
 		f.Severity = o.Severity
 	}
+	if o.Rule == "disturbance" && f.Rule == "stress-history" && f.Severity == Doubt && !strings.Contains(o.Found, " or ") {
+		f.Severity = Conflict // two independent signs of one cause
+	}
 	f.Impact = max(f.Impact, o.Impact)
 	for _, cell := range o.Cells {
 		if !slices.Contains(f.Cells, cell) {

@@ -258,6 +258,7 @@ func (c *context) describeExchange(m *move, readings map[int]*reading) Finding {
 	rule := ruleByID("specimen-exchange")
 	f := m.r.finding(rule, waterContent)
 	f.Quantity, f.Severity = "specimen", Conflict
+	f.fix, f.gain = c.correctPlace(m), m.gain
 	f.Found = m.r.name()
 	f.Wanted = m.q.name()
 	f.Message = fmt.Sprintf("%s and %s look exchanged: neither goes with the ground around it, and each goes with the ground around the other.", m.r.name(), m.q.name())
@@ -273,6 +274,7 @@ func (c *context) describeElsewhere(m *move, rd *reading) Finding {
 	r := m.r
 	f := r.finding(ruleByID("specimen-place"), waterContent)
 	f.Quantity, f.Severity = "depth", Conflict
+	f.fix, f.gain = c.correctPlace(m), m.gain
 	f.Found = r.typedDepth() + " m"
 	f.Evidence = c.brokenPlace(r, rd)
 	f.Cells = cells(r)

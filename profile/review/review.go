@@ -11,6 +11,19 @@ import (
 // findings are complete all the same.
 func Review(p *profile.Profile) (Findings, error) {
 	c := newContext(p)
+	found := c.reviewed()
+	problems := c.answer(found)
+	found = append(found, c.staleDecisions(found)...)
+	found.sort(c.order)
+	found.identify()
+	if len(problems) > 0 {
+		return found, problems
+	}
+	return found, nil
+}
+
+// findings checks a profile with every rule.
+func (c *context) findings() Findings {
 	var found Findings
 	moved := c.misplaced(&found)
 	for _, r := range c.rows {
@@ -29,13 +42,5 @@ func Review(p *profile.Profile) (Findings, error) {
 			found = append(found, rules[i].check(c)...)
 		}
 	}
-	found = c.merge(found)
-	problems := c.answer(found)
-	found = append(found, c.staleDecisions(found)...)
-	found.sort(c.order)
-	found.identify()
-	if len(problems) > 0 {
-		return found, problems
-	}
-	return found, nil
+	return c.merge(found)
 }
