@@ -42,6 +42,7 @@ func Build(site *Site, opt Options) (*Profile, error) {
 		b.Points = g.points(stations)
 		g.tellHistory(site, p, b, stations)
 		compressionIndex(g.borehole, b.Points, b.Results)
+		byHistory(g.borehole, b.Points, b.Results)
 		g.remark(b)
 		b.Assumptions = append(b.Assumptions, g.assumptions...)
 	}

@@ -73,18 +73,31 @@ func (g *ground) derive(site *Site) []DerivedResult {
 	return out
 }
 
-// correlate adds the band of correlated compression indices. Rules for one kind
-// of ground do not speak about another.
+// correlate adds the bands that correlations give for compression index,
+// compression ratio and recompression index. Rules for one kind of ground do not
+// speak about another.
 func (d *DerivedResult) correlate(site *Site, v correlate.Values, organic bool) {
 	if organic {
 		v["organic"] = max(v["organic"], peatOrganic)
 	}
-	delete(v, "Cc") // a measured Cc is what the band is compared with
-	band, err := correlate.BandOf(correlate.CompressionIndex, v, site.Settings.correlationsFor(correlate.CompressionIndex))
-	if err != nil {
-		return // nothing measured here that a correlation could use
+	d.MeasuredCr = d.Result.RecompressionIndex
+	if e := d.Result.VoidRatioOf(); d.MeasuredCc.Known && e.Known {
+		d.MeasuredCR = Known(d.MeasuredCc.Value / (1 + e.Value))
 	}
-	d.CorrelatedCc = Around(band.Low, band.Best, band.High)
+	delete(v, "Cc") // a measured Cc is what the bands are compared with
+	d.CorrelatedCc = d.band(site, correlate.CompressionIndex, v)
+	d.CorrelatedCR = d.band(site, correlate.CompressionRatio, v)
+	d.CorrelatedCr = d.band(site, correlate.RecompressionIndex, v)
+}
+
+// band returns what the independent families of correlations give for a
+// quantity, and keeps each of them for the reader. It is not known where nothing
+// was measured that one of them could use.
+func (d *DerivedResult) band(site *Site, q correlate.Quantity, v correlate.Values) Range {
+	band, err := correlate.BandOf(q, v, site.Settings.correlationsFor(q))
+	if err != nil {
+		return Range{}
+	}
 	for _, m := range band.Members {
 		d.Correlations = append(d.Correlations, Correlated{
 			ID: m.Correlation.ID, Quantity: string(m.Correlation.Quantity), Family: m.Correlation.Family,
@@ -92,6 +105,7 @@ func (d *DerivedResult) correlate(site *Site, v correlate.Values, organic bool) 
 			Verified: m.Correlation.Verified.String(), Warnings: m.Estimate.Warnings, Counts: m.Speaks,
 		})
 	}
+	return Around(band.Low, band.Best, band.High)
 }
 
 // compressionIndex gives the points of a borehole a compression index. Within

@@ -106,6 +106,9 @@ func Explain(p *Profile, borehole string, depth float64) (Explanation, error) {
 	x.results()
 	x.cone()
 	x.history(points)
+	for _, p := range points {
+		x.byHistory(p)
+	}
 	x.assumptions()
 	last := points[len(points)-1]
 	return Explanation{Borehole: borehole, Depth: depth, Stratum: last.Stratum, Steps: x.steps}, nil

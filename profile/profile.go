@@ -102,6 +102,8 @@ type Point struct {
 	Zone                 Zone             `json:"zone,omitempty"`
 	ZoneProbability      map[Zone]float64 `json:"zone_probability,omitempty"`
 	CompressionIndex     Range            `json:"compression_index"`
+	UndrainedStrength    Range            `json:"correlated_undrained_strength_kPa"` // by stress history
+	K0                   Range            `json:"correlated_k0"`                     // by stress history
 
 	stratum int // index into the borehole's strata
 }
@@ -201,6 +203,10 @@ type DerivedResult struct {
 	Effective        Number       `json:"effective_stress_kPa"`
 	MeasuredCc       Number       `json:"measured_compression_index"`
 	CorrelatedCc     Range        `json:"correlated_compression_index"`
+	MeasuredCR       Number       `json:"measured_compression_ratio"` // Cc/(1+e0)
+	CorrelatedCR     Range        `json:"correlated_compression_ratio"`
+	MeasuredCr       Number       `json:"measured_recompression_index"`
+	CorrelatedCr     Range        `json:"correlated_recompression_index"`
 	Correlations     []Correlated `json:"correlations,omitempty"`
 	PlasticityIndex  Number       `json:"plasticity_index_pct"`
 	LiquidityIndex   Number       `json:"liquidity_index"`

@@ -66,6 +66,13 @@ func TestEveryNumberIsExplained(t *testing.T) {
 			"compression_index": {"Stress history", "compression_index_here"},
 			"zone":              {"Zone", "zone"},
 			"zone_probability":  {"Zone", "zone_probability"},
+
+			"correlated_undrained_strength":      {"Strength and horizontal", "correlated_undrained_strength_kPa"},
+			"correlated_undrained_strength_low":  {"Strength and horizontal", "correlated_undrained_strength_low_kPa"},
+			"correlated_undrained_strength_high": {"Strength and horizontal", "correlated_undrained_strength_high_kPa"},
+			"correlated_k0":                      {"Strength and horizontal", "correlated_k0"},
+			"correlated_k0_low":                  {"Strength and horizontal", "correlated_k0_low"},
+			"correlated_k0_high":                 {"Strength and horizontal", "correlated_k0_high"},
 		},
 		"tests": {
 			"effective_stress":             {"Preconsolidation test", "effective_stress_kPa"},

@@ -55,8 +55,14 @@ func Points(bs ...profile.BoreholeProfile) *Table {
 			{"Cc", "compression_index", Pure, 2},
 			{"zone", "zone", Words, 0},
 			{"P(zone)", "zone_probability", Pure, 2},
+			{"su corr. low", "correlated_undrained_strength_low", Stress, 0},
+			{"su corr.", "correlated_undrained_strength", Stress, 0},
+			{"su corr. high", "correlated_undrained_strength_high", Stress, 0},
+			{"K0 corr. low", "correlated_k0_low", Pure, 2},
+			{"K0 corr.", "correlated_k0", Pure, 2},
+			{"K0 corr. high", "correlated_k0_high", Pure, 2},
 		},
-		Note: "low and high are the 5 and 95 % points. At a boundary the first row ends the upper stratum and the second begins the lower.",
+		Note: "su and K0 are correlations with the stress history (" + profile.StrengthByHistory + ", " + profile.K0ByHistory + " with φ′ by " + profile.FrictionByIndex + "), not measurements. low and high are the 5 and 95 % points. At a boundary the first row ends the upper stratum and the second begins the lower.",
 	}
 	for _, b := range bs {
 		for _, p := range b.Points {
@@ -64,6 +70,8 @@ func Points(bs ...profile.BoreholeProfile) *Table {
 			row = append(row, three(p.Preconsolidation)...)
 			row = append(row, three(p.OCR)...)
 			row = append(row, three(p.POP)[1], three(p.CompressionIndex)[1], T(string(p.Zone)), probability(p))
+			row = append(row, three(p.UndrainedStrength)...)
+			row = append(row, three(p.K0)...)
 			t.Add(row...)
 		}
 	}
@@ -184,7 +192,7 @@ func Strata(bs ...profile.BoreholeProfile) *Table {
 // Compression returns measured and correlated compression indices side by side.
 func Compression(bs ...profile.BoreholeProfile) *Table {
 	t := &Table{
-		Name: "compression", Title: "Compression index: measured beside correlated",
+		Name: "compression", Title: "Compressibility: measured beside correlated",
 		Columns: []Column{
 			{"borehole", "borehole", Words, 0},
 			{"depth", "depth", Length, 2},
@@ -194,7 +202,15 @@ func Compression(bs ...profile.BoreholeProfile) *Table {
 			{"Cc correlated low", "correlated_low", Pure, 2},
 			{"best", "correlated", Pure, 2},
 			{"high", "correlated_high", Pure, 2},
-			{"correlations", "correlations", Words, 0},
+			{"CR measured", "measured_compression_ratio", Pure, 3},
+			{"CR correlated low", "correlated_ratio_low", Pure, 2},
+			{"best", "correlated_ratio", Pure, 2},
+			{"high", "correlated_ratio_high", Pure, 2},
+			{"Cr measured", "measured_recompression_index", Pure, 3},
+			{"Cr correlated low", "correlated_recompression_low", Pure, 3},
+			{"best", "correlated_recompression", Pure, 3},
+			{"high", "correlated_recompression_high", Pure, 3},
+			{"correlations for Cc", "correlations", Words, 0},
 		},
 		Note: "Correlated values rest on the relations named, one for each family that rests on data or assumptions of its own; see the catalogue for their soil, range and how far their coefficients were verified.",
 	}
@@ -203,8 +219,10 @@ func Compression(bs ...profile.BoreholeProfile) *Table {
 			if !d.MeasuredCc.Known && !d.CorrelatedCc.Known {
 				continue
 			}
-			c := three(d.CorrelatedCc)
-			t.Add(T(b.Borehole), N(d.Depth), T(d.Specimen), T(d.Stratum), number(d.MeasuredCc), c[0], c[1], c[2], T(correlationIDs(d)))
+			row := append([]Cell{T(b.Borehole), N(d.Depth), T(d.Specimen), T(d.Stratum), number(d.MeasuredCc)}, three(d.CorrelatedCc)...)
+			row = append(append(row, number(d.MeasuredCR)), three(d.CorrelatedCR)...)
+			row = append(append(row, number(d.MeasuredCr)), three(d.CorrelatedCr)...)
+			t.Add(append(row, T(correlationIDs(d)))...)
 		}
 	}
 	return t
