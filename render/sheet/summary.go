@@ -83,6 +83,8 @@ func boreholeMark(i int) draw.Marker {
 type summaryStratum struct {
 	name  string
 	lines []summaryLine // one for each borehole that has something
+	text  []draw.Label  // its name and its OCR in words
+	named int           // how many of these are the name
 	box   draw.Box      // its row on the sheet
 }
 

@@ -41,12 +41,10 @@ func (s *summarySheet) drawRows() {
 	zoneTints(s.c, s.ratio, axis.NewLog(low, high, s.ratio.Left, s.ratio.Right), s.in.Settings.Limits, s.f.small)
 	for i := range s.strata {
 		st := &s.strata[i]
-		lines := s.nameLines(st)
-		y := (st.box.Top+st.box.Bottom)/2 - float64(len(lines))*s.f.small.Line()/2
-		names := len(bold(s.f.small).Wrap(st.title(), 0.27*s.plot.Width()-s.boreholeWidth()-3, 3))
-		for k, l := range lines {
+		y := (st.box.Top+st.box.Bottom)/2 - float64(len(st.text))*s.f.small.Line()/2
+		for k, l := range st.text {
 			f := s.f.small
-			if k < names {
+			if k < st.named {
 				f = bold(f)
 			}
 			y += s.f.small.Line()

@@ -41,6 +41,9 @@ func (s *summarySheet) layOut() {
 // first, and counted.
 func (s *summarySheet) shareRows(room float64) {
 	const least, most = 3.4, 24.0 // mm
+	for i := range s.strata {
+		s.name(&s.strata[i])
+	}
 	rows := func(pitch float64) float64 {
 		sum := 0.0
 		for i := range s.strata {
@@ -91,14 +94,15 @@ func (st *summaryStratum) height(pitch float64) float64 {
 
 // rowHeight is what a stratum needs for its lines and for its name.
 func (s *summarySheet) rowHeight(st *summaryStratum, pitch float64) float64 {
-	return math.Max(st.height(pitch), float64(len(s.nameLines(st)))*s.f.small.Line()+2)
+	return math.Max(st.height(pitch), float64(len(st.text))*s.f.small.Line()+2)
 }
 
-// nameLines are the name of a stratum and its OCR in words.
-func (s *summarySheet) nameLines(st *summaryStratum) []draw.Label {
+// name lays out the name of a stratum and its OCR in words.
+func (s *summarySheet) name(st *summaryStratum) {
 	width := 0.27*s.plot.Width() - s.boreholeWidth() - 3
-	lines := stacked(bold(s.f.small).Wrap(st.title(), width, 3))
-	return append(lines, stacked(s.f.small.Wrap(st.ratioWords(), width, 3))...)
+	st.text = stacked(bold(s.f.small).Wrap(st.title(), width, 3))
+	st.named = len(st.text)
+	st.text = append(st.text, stacked(s.f.small.Wrap(st.ratioWords(), width, 3))...)
 }
 
 // boreholeWidth is the room for the names of boreholes.
