@@ -43,8 +43,8 @@ func checkStages(r Record, problems *Problems) {
 				*problems = append(*problems, Problem{i, s.Line, quantity, fmt.Sprintf("%.4g", n.Value), wanted})
 			}
 		}
-		if !(s.EffectiveStress >= 0 && s.EffectiveStress < largestStress) {
-			*problems = append(*problems, Problem{i, s.Line, "effective stress", fmt.Sprintf("%.4g", s.EffectiveStress), "kPa, zero or more and below 1,000,000"})
+		if p := s.EffectiveStress; p != 0 && !(p >= smallestStress && p < largestStress) {
+			*problems = append(*problems, Problem{i, s.Line, "effective stress", fmt.Sprintf("%.4g", p), "kPa, zero or 0.01 to 1,000,000"})
 		}
 		within("void ratio", s.VoidRatio, 0, largestVoidRatio, "more than 0 and less than 30")
 		within("strain", s.Strain, -50, 95, "percent, from -50 to 95")

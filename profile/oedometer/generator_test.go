@@ -59,7 +59,10 @@ type plan struct {
 func (p plan) stages(s soil, r *rand.Rand) []Stage {
 	var out []Stage
 	add := func(stress, e float64) {
-		out = append(out, Stage{EffectiveStress: stress, VoidRatio: Known(e + p.noise*r.NormFloat64())})
+		if p.noise > 0 {
+			e += p.noise * r.NormFloat64()
+		}
+		out = append(out, Stage{EffectiveStress: stress, VoidRatio: Known(e)})
 	}
 	if p.readings > 0 {
 		for i := range p.readings {

@@ -8,7 +8,8 @@ import (
 // The limits of what a record may hold.
 const (
 	readingTolerance = 0.005 // in e, between two readings of one stage, and the largest rise under load taken as reading noise
-	largestStress    = 1e6   // kPa; more is a unit mistaken
+	smallestStress   = 0.01  // kPa; less is a unit mistaken
+	largestStress    = 1e6   // kPa; so is more
 	largestVoidRatio = 30.0  // fibrous peat reaches 25
 	swellingStress   = 100.0 // kPa; a specimen that rises above its start under more did not swell
 )

@@ -129,7 +129,7 @@ func comparePublished(t *testing.T, c Case, curve Curve, got Interpretation) {
 }
 
 // factsOfTheTrade holds what every sound curve shows (common practice).
-func factsOfTheTrade(t *testing.T, c Curve, got Interpretation) {
+func factsOfTheTrade(t testing.TB, c Curve, got Interpretation) {
 	t.Helper()
 	cc := got.CompressionIndex
 	if cs := got.SwellingIndex; cs.Known && cc.Known && cs.Value > 0.5*cc.Value {

@@ -12,7 +12,6 @@ type reading struct {
 	yield    Yield
 	bound    Bound
 	why      string // why it is a bound
-	notes    []string
 	spread   float64
 	parts    Uncertainty
 	q        Number

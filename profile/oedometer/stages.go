@@ -6,6 +6,7 @@ const (
 	waterUnitWeight = 9.81  // kN/m³
 	timeFactor50    = 0.197 // Tv at 50 % (Terzaghi; common practice)
 	timeFactor90    = 0.848 // Tv at 90 %
+	stiffest        = 1e-9  // m²/kN; below it the stage did not compress
 	mostStages      = 200   // a dense record has no stages to list
 )
 
@@ -28,7 +29,7 @@ func (c Curve) stageResults() []StageResult {
 		}
 		mv := (a.VoidRatio - b.VoidRatio) / (1 + a.VoidRatio) / change // m²/kN
 		r := StageResult{From: a.EffectiveStress, To: b.EffectiveStress, Branch: b.Branch, Line: b.Line, Compressibility: 1000 * mv}
-		if mv > 0 {
+		if mv > stiffest {
 			r.Modulus = Known(1 / mv)
 		}
 		stage := c.stages[b.Stage]
