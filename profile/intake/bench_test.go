@@ -5,6 +5,8 @@ import (
 	"strings"
 	"testing"
 	"testing/fstest"
+
+	"pastload/testdata"
 )
 
 // BenchmarkRead10000 reads a results table of 10,000 rows and nine quantities.
@@ -25,6 +27,16 @@ func BenchmarkRead10000(b *testing.B) {
 		}
 		if len(site.Boreholes) != 40 {
 			b.Fatal(len(site.Boreholes))
+		}
+	}
+}
+
+// BenchmarkReadDemo reads the worked scenario: nine small tables.
+func BenchmarkReadDemo(b *testing.B) {
+	b.ReportAllocs()
+	for b.Loop() {
+		if _, err := ReadFS(testdata.Demo(), "demo", Options{}); err != nil {
+			b.Fatal(err)
 		}
 	}
 }

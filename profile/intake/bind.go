@@ -114,7 +114,9 @@ func (rd *reader) unknownColumn(g *grid, i int, f field, specs []spec) {
 	if g.table == Results {
 		message = fmt.Sprintf("column %q is not known: its cells are kept as typed and not used", f.header)
 	}
-	if names := nearSpecs(bare(f.header), specs); len(names) > 0 {
+	if strings.ContainsAny(f.header, "?\ufffd") {
+		message += "; a letter was lost when the file was saved: write the name in words"
+	} else if names := nearSpecs(bare(f.header), specs); len(names) > 0 {
 		message += "; near it: " + quoted(names)
 	}
 	rd.note(fmt.Sprintf("%s:%d:%d", g.file, g.header.lineOf(i), i+1), message)

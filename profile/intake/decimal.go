@@ -110,6 +110,9 @@ type place struct{ line, column int }
 func (rd *reader) decimalMark(g *grid, specs []spec, fields []field, rows []gridRow) (byte, map[place]bool) {
 	var c census
 	for _, r := range rows {
+		if g.table == Settings && !numericSetting(specs, fields, r) {
+			continue // "1,200" may be the number of a drawing
+		}
 		for i, f := range fields {
 			if f.spec < 0 || specs[f.spec].kind == textColumn || specs[f.spec].kind == dateColumn {
 				continue

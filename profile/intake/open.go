@@ -7,6 +7,7 @@ import (
 	"fmt"
 	"io/fs"
 	"os"
+	"path"
 	"path/filepath"
 	"slices"
 	"sort"
@@ -15,22 +16,22 @@ import (
 	"pastload/profile"
 )
 
-// open finds the tables at a path. single tells that one file is all there is.
-func (rd *reader) open(path string) (grids map[Table]*grid, single bool) {
-	info, err := os.Stat(path)
+// open finds the tables at a place. single tells that one file is all there is.
+func (rd *reader) open(place string) (grids map[Table]*grid, single bool) {
+	info, err := os.Stat(place)
 	if err != nil {
-		rd.add(Problem{File: path, Message: reason(err), Wanted: "a folder of CSV tables, a CSV file or an .xlsx workbook"})
+		rd.add(Problem{File: place, Message: reason(err), Wanted: "a folder of CSV tables, a CSV file or an .xlsx workbook"})
 		return nil, false
 	}
 	grids = map[Table]*grid{}
-	folder, name := filepath.Split(path)
+	folder, name := filepath.Split(place)
 	if folder == "" {
 		folder = "."
 	}
 	fsys := os.DirFS(folder)
 	switch {
 	case info.IsDir():
-		rd.openFolder(os.DirFS(path), base(path), grids)
+		rd.openFolder(os.DirFS(place), base(place), grids)
 	case isTableFile(name):
 		t, ok := tableOf(strings.TrimSuffix(name, filepath.Ext(name)))
 		if !ok {
@@ -42,7 +43,7 @@ func (rd *reader) open(path string) (grids map[Table]*grid, single bool) {
 		return grids, t == Results
 	case isWorkbook(name):
 		rd.openWorkbook(fsys, name, grids)
-	case strings.EqualFold(filepath.Ext(path), ".xls"), strings.EqualFold(filepath.Ext(path), ".ods"):
+	case strings.EqualFold(filepath.Ext(place), ".xls"), strings.EqualFold(filepath.Ext(place), ".ods"):
 		rd.add(Problem{File: name, Message: "a workbook of another kind", Wanted: "the workbook saved as .xlsx"})
 	default:
 		rd.add(Problem{File: name, Message: "is no table", Wanted: "a folder of CSV tables, a CSV file (.csv, .tsv, .txt) or an .xlsx workbook"})
@@ -69,11 +70,15 @@ func (rd *reader) openFolder(fsys fs.FS, folder string, grids map[Table]*grid) {
 	}
 	sort.Slice(entries, func(i, j int) bool { return entries[i].Name() < entries[j].Name() })
 	from := map[Table]string{}
+	book := ""
 	for _, e := range entries {
 		name := e.Name()
 		t, ok := tableOf(strings.TrimSuffix(name, filepath.Ext(name)))
 		if e.IsDir() || strings.HasPrefix(name, ".") {
 			continue
+		}
+		if isWorkbook(name) && !strings.HasPrefix(name, "~") {
+			book = name
 		}
 		if !ok || !isTableFile(name) {
 			rd.note(name, "is not one of the tables and was not read")
@@ -88,7 +93,10 @@ func (rd *reader) openFolder(fsys fs.FS, folder string, grids map[Table]*grid) {
 			grids[t] = g
 		}
 	}
-	if len(from) == 0 {
+	switch {
+	case len(from) == 0 && book != "":
+		rd.add(Problem{File: folder, Message: "no tables in the folder, but a workbook, " + book, Wanted: "the workbook itself to be named: " + path.Join(folder, book)})
+	case len(from) == 0:
 		rd.add(Problem{File: folder, Message: "no tables in the folder", Wanted: "files named boreholes.csv, strata.csv, water.csv, results.csv, oedometer.csv, cone.csv, history.csv, decisions.csv or settings.csv"})
 	}
 }
@@ -142,14 +150,14 @@ func (rd *reader) source(name string, t Table, data []byte, encoding string) {
 
 // reason says in words why the file system refused.
 func reason(err error) string {
-	var path *fs.PathError
+	var fault *fs.PathError
 	switch {
 	case errors.Is(err, fs.ErrNotExist):
 		return "there is no such file or folder"
 	case errors.Is(err, fs.ErrPermission):
 		return "may not be read"
-	case errors.As(err, &path):
-		return path.Err.Error()
+	case errors.As(err, &fault):
+		return fault.Err.Error()
 	}
 	return err.Error()
 }

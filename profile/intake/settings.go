@@ -2,6 +2,7 @@ package intake
 
 import (
 	"fmt"
+	"slices"
 	"strings"
 
 	"pastload/profile"
@@ -146,6 +147,22 @@ func (s *site) apply(t *table[settingRow], r row[settingRow], k setting) bool {
 		*k.number(&s.out.Settings) = n.Value * k.scale
 	}
 	return ok
+}
+
+// numericSetting tells whether a row of the settings table sets a number.
+func numericSetting(specs []spec, fields []field, r gridRow) bool {
+	for i, f := range fields {
+		if f.spec < 0 || specs[f.spec].name != "setting" {
+			continue
+		}
+		name := key(r.field(i))
+		for _, k := range knownSettings {
+			if k.number != nil && slices.ContainsFunc(k.names(), func(n string) bool { return key(n) == name }) {
+				return true
+			}
+		}
+	}
+	return false
 }
 
 // spec describes the value of a numeric setting as if it were a column.

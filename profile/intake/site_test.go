@@ -168,6 +168,22 @@ func TestUnknownColumns(t *testing.T) {
 	}
 }
 
+// TestLostLetter: Windows-1252 has no σ; what is left of the name is not guessed.
+func TestLostLetter(t *testing.T) {
+	site := mustRead(t, files{"results.csv": "borehole,depth (m),?'p (kPa)\nBH1,2,80\n"})
+	if want := []profile.Note{{Where: "results.csv:1:3", Message: `column "?'p (kPa)" is not known: its cells are kept as typed and not used; a letter was lost when the file was saved: write the name in words`}}; !slices.Equal(site.Notes, want) {
+		t.Errorf("notes %q", site.Notes)
+	}
+}
+
+// TestDrawingNumber: a word that looks like a number decides no decimal mark.
+func TestDrawingNumber(t *testing.T) {
+	site := mustRead(t, files{"settings.csv": "setting,value\nnumber,\"1,200\"\nrevision,\"2,5\"\nwater level uncertainty,0.25\n"})
+	if s := site.Settings; s.Title.Number != "1,200" || s.Title.Revision != "2,5" || s.WaterLevelUncertainty != 0.25 {
+		t.Errorf("%+v", s)
+	}
+}
+
 func TestStratumDisagrees(t *testing.T) {
 	site := mustRead(t, files{
 		"strata.csv":  "borehole,top (m),base (m),stratum\nBH1,0,3,Crust\nBH1,3,9,Clay\n",

@@ -13,7 +13,7 @@ type tradeName struct {
 
 const unitWeightNames = "γ; gamma; γb; γt; bulk unit weight; total unit weight; moist unit weight; wet unit weight; bulk density; wet density; unit wt"
 
-const preconsolidationNames = "σ'p; σp'; σ'pc; σ'c; σ'vm; σ'vc; Pc; Pc'; P'c; Pp; Pp'; preconsolidation pressure; preconsolidation; pre-consolidation stress; pre-consolidation pressure; yield stress; vertical yield stress; σ'y; σ'vy; σ'ym; maximum past pressure; maximum past stress; maximum past effective stress; past maximum stress"
+const preconsolidationNames = "σ'p; σp'; σ'pc; σ'c; σ'vm; σ'vc; Pc; Pc'; P'c; Pp; Pp'; preconsolidation pressure; preconsolidation; pre-consolidation stress; pre-consolidation pressure; yield stress; vertical yield stress; σ'y; σ'vy; σ'ym; maximum past pressure; maximum past stress; maximum past effective stress; past maximum stress; s'p; sp'"
 
 // names returns the synonyms.
 func (t tradeName) names() string { return t.synonyms }
@@ -45,7 +45,7 @@ var trade = map[string]tradeName{
 	"void ratio":       {ratio, above(0, 40), "e; e0; eo; initial void ratio; in situ void ratio; natural void ratio", "in the ground"},
 	"clay fraction":    {percent, within(0, 100), "clay; CF; clay content; clay (<2 µm); clay size", "finer than 2 µm, by mass"},
 	"organic content":  {percent, within(0, 100), "organic; organics; organic matter; organic matter content", "by mass"},
-	"effective stress": {stress, positive, "σ'v0; σ'v; σ'vo; σv0'; σv'; σvo'; σ'0; p0'; po'; p'0; p'o; effective vertical stress; vertical effective stress; in situ effective stress; effective overburden stress; effective overburden pressure; effective overburden; overburden effective stress", "vertical, as given by others; used where nothing else can give it"},
+	"effective stress": {stress, positive, "σ'v0; σ'v; σ'vo; σv0'; σv'; σvo'; σ'0; p0'; po'; p'0; p'o; effective vertical stress; vertical effective stress; in situ effective stress; effective overburden stress; effective overburden pressure; effective overburden; overburden effective stress; s'v0; s'v; s'vo; sv0'; svo'", "vertical, as given by others; used where nothing else can give it"},
 
 	"preconsolidation stress":      {stress, positive, preconsolidationNames, "vertical yield stress, as reported"},
 	"preconsolidation stress low":  {stress, positive, suffixed("low", "min", "minimum", "lower"), "lower end of its range"},
