@@ -124,7 +124,7 @@ func TestAddingPointOnStraightPart(t *testing.T) {
 			// a further point outweighs a little.
 			"slope": 0.02, "pacheco-silva": 0.02,
 			"work":          0.08, // the trapezium over a shorter step over-counts less
-			"bilogarithmic": 0.06, // the virgin part is slightly bent in this plane
+			"bilogarithmic": 0.10, // slightly bent in this plane, and the window of its line moves
 			"casagrande":    0.05, // the spline bends otherwise, at the corner too
 		}
 		for i, m := range a.Methods {

@@ -47,6 +47,11 @@ func readLoading(l *loading, around surroundings) reading {
 	return r
 }
 
+// besideOnly is said of a construction without a calibration. On generated curves
+// that are straight in e–log σ′ the two of them read 0.65 to 0.85 of where the
+// asymptotes meet; on soils with a constant modulus before yield they read more.
+const besideOnly = "reported beside the others and not combined: its bias depends on how the modulus runs before yield, which e–log σ′ does not show"
+
 // report turns outcomes into methods and sets their spread.
 func (r *reading) report(outcomes []outcome) {
 	low, high, n, weights := math.Inf(1), 0.0, 0, 0.0
@@ -56,6 +61,9 @@ func (r *reading) report(outcomes []outcome) {
 		m := Method{ID: c.id, Name: c.name, Mark: c.mark, Note: o.note, Known: o.ok, Used: o.ok && calibrated, Lines: o.lines}
 		if o.ok {
 			m.Stress, m.Low, m.High = o.stress, o.stress, o.stress
+			if !calibrated {
+				m.Note = besideOnly
+			}
 		}
 		if m.Used {
 			bias := known.at(r.in.virgin.flattening)
