@@ -174,14 +174,14 @@ func Looks(s Sample) []Look {
 			}
 		}
 		g := math.Abs(s[far].Value-m.Mean) / m.SD
-		if critical, err := GrubbsCritical(len(s)); err == nil && g > critical {
+		if critical, err := GrubbsCritical(len(s)); err == nil && g > critical && finite(g) {
 			looks = append(looks, Look{s[far], "Grubbs 5 %", g, critical})
 		}
 	}
 	if sd, err := RobustSD(s); err == nil && len(s) >= modifiedZLeast && sd > 0 {
 		middle := median(s.values())
 		for _, o := range s {
-			if z := math.Abs(o.Value-middle) / sd; z > modifiedZLimit && (len(looks) == 0 || looks[0].Observation != o) {
+			if z := math.Abs(o.Value-middle) / sd; z > modifiedZLimit && finite(z) && (len(looks) == 0 || looks[0].Observation != o) {
 				looks = append(looks, Look{o, "modified z", z, modifiedZLimit})
 			}
 		}

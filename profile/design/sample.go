@@ -41,6 +41,9 @@ type Sample []Observation
 // quantity of the ground comes near it.
 const largest = 1e100
 
+// finite reports whether v is a number that can be written.
+func finite(v float64) bool { return math.Abs(v) <= math.MaxFloat64 }
+
 // check returns an error where a value, depth or weight cannot be computed with.
 func (s Sample) check() error {
 	for _, o := range s {

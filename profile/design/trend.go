@@ -67,6 +67,9 @@ func FitLine(s Sample, d Distribution) (DepthLine, error) {
 	df := float64(len(s) - 2)
 	l.SD = math.Sqrt(squares / df)
 	l.P = slopeChance(l, total, df)
+	if !finite(l.Slope) || !finite(l.SD) || !finite(l.SlopeAt(l.From)) || !finite(l.SlopeAt(l.To)) || !finite(l.P) {
+		return DepthLine{}, fmt.Errorf("%w: the slope is too steep for a number", ErrOutOfRange)
+	}
 	return l, nil
 }
 

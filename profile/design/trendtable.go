@@ -75,10 +75,10 @@ func (e *evaluation) trend() *Trend {
 	if l.Distribution == LogNormal {
 		t.LogSlope = profile.Known(l.Slope)
 	}
-	if slope, _, err := TheilSen(e.sample); err == nil {
+	if slope, _, err := TheilSen(e.sample); err == nil && finite(slope) {
 		t.RobustSlope = profile.Known(slope)
 	}
-	if c := l.change(); c <= math.MaxFloat64 {
+	if c := l.change(); finite(c) {
 		t.Change = profile.Known(c)
 	}
 	if !t.Used {
@@ -103,8 +103,10 @@ func (e *evaluation) trend() *Trend {
 func depthsBetween(from, to float64) []float64 {
 	step := math.Max(0.5, (to-from)/100)
 	depths := []float64{from}
-	for k := math.Floor(from/step) + 1; k*step < to-1e-9; k++ {
-		if z := k * step; z > from+1e-9 {
+	first := math.Floor(from / step)
+	// Counted with whole numbers: adding one to a float64 beyond 2⁵³ changes nothing.
+	for i := range int(math.Ceil((to-from)/step)) + 1 {
+		if z := (first + float64(i)) * step; z > from+1e-9 && z < to-1e-9 && z > depths[len(depths)-1] {
 			depths = append(depths, z)
 		}
 	}
