@@ -30,6 +30,7 @@ type input struct {
 	estimate float64 // two-line σ′p, the yardstick of windows and gates, kPa
 	cr       float64 // recompression index, 0 where none could be read
 	fromLoop bool    // cr comes from an unload–reload loop
+	initial  float64 // slope of first loading before σ′p, 0 where none could be read
 	beta     float64 // dW/dσ′ of the reload limb, 0 without a loop
 	inSitu   Number  // σ′v0, kPa
 	rate     bool    // constant rate of strain, or increments small enough for moduli
@@ -89,13 +90,13 @@ func newInput(l *loading, around surroundings, share float64) (*input, bool) {
 	in.estimate = in.start
 	p := l.twoLines(l.x, l.e, in.start, in.virgin, powerOfTen)
 	if p.ok {
-		in.estimate = p.stress
+		in.estimate, in.initial = p.stress, math.Max(0, -p.one.slope)
 	}
 	switch {
 	case around.cr > 0:
 		in.cr, in.fromLoop = around.cr, true
-	case p.ok:
-		in.cr = math.Max(0, -p.one.slope)
+	default:
+		in.cr = in.initial
 	}
 	return in, true
 }

@@ -6,6 +6,23 @@ import (
 	"pastload/profile/oedometer"
 )
 
+// Every problem of a record is reported at once, each with its stage.
+func ExamplePrepare() {
+	_, err := oedometer.Prepare(oedometer.Record{
+		InitialVoidRatio: oedometer.Known(1.2),
+		InitialHeight:    oedometer.Known(20),
+		Stages: []oedometer.Stage{
+			{EffectiveStress: 25, Height: oedometer.Known(19.8)},
+			{EffectiveStress: 50, Height: oedometer.Known(0)},
+			{EffectiveStress: -100, VoidRatio: oedometer.Known(1.1)},
+		},
+	})
+	fmt.Println(err)
+	// Output:
+	// stage 2: height: 0; want a height in mm above zero
+	// stage 3: effective stress: -100; want kPa, zero or 0.01 to 1,000,000
+}
+
 // A textbook curve: solution sheet of Kathmandu University, 2020, which reads
 // 115 kPa from a graph.
 func ExampleInterpret() {

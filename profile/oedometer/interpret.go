@@ -76,6 +76,10 @@ func Interpret(c Curve, s Situation) (Interpretation, error) {
 // seating is in doubt.
 const largeFirstLoad = 4.0
 
+// steepStart is the ratio of the slopes of first loading and loop from which the
+// specimen counts as disturbed (a tool's choice).
+const steepStart = 3.0
+
 // firstLoadStrain returns the strain in percent from the initial void ratio to
 // the first load; zero where the initial void ratio is that of the first load.
 func (c Curve) firstLoadStrain(l *loading) float64 {
@@ -147,6 +151,9 @@ func (r *Interpretation) remark(c Curve, read reading) {
 		if ratio := r.RecompressionIndex.Value / r.CompressionIndex.Value; ratio > 0.3 {
 			r.Notes = append(r.Notes, fmt.Sprintf("Cr/Cc is %.2f; 0.05 to 0.20 is usual", ratio))
 		}
+	}
+	if in := read.in; in.fromLoop && in.initial > steepStart*in.cr {
+		r.Notes = append(r.Notes, fmt.Sprintf("first loading before σ′p is %.1f times as steep as the loop: the specimen is disturbed", in.initial/in.cr))
 	}
 	switch c.Kind {
 	case ConstantRate:

@@ -3,6 +3,7 @@ package oedometer
 import (
 	"math"
 	"math/rand"
+	"strings"
 	"testing"
 )
 
@@ -71,10 +72,44 @@ func TestRecompressionFromLoop(t *testing.T) {
 	if want := 0.06; math.Abs(got.SwellingIndex.Value-want) > 1e-6 {
 		t.Errorf("Cs %.5f %q, want %.5f", got.SwellingIndex.Value, got.SwellingIndex.How, want)
 	}
+	// First loading falls 0.07 over the log cycle: no steeper than the loop.
+	for _, n := range got.Notes {
+		if strings.Contains(n, "times as steep as the loop") {
+			t.Errorf("note %q", n)
+		}
+	}
 	if !got.method(t, "dissipated-energy").Known {
 		t.Error("no dissipated energy though there is a loop")
 	}
 	if math.Abs(got.RecompressionRatio.Value-0.0625/2) > closedForm {
 		t.Errorf("RR %.5f", got.RecompressionRatio.Value)
+	}
+}
+
+func TestDisturbedStart(t *testing.T) {
+	clay := soil{yield: 150, cc: 0.5, cr: 0.15, e0: 1.4, width: 0.1}
+	stiffLoop := clay
+	stiffLoop.cr = 0.03 // the loop is of the undisturbed structure
+	p := plan{first: 12.5, ratio: 2, last: 1600}
+	stages := p.stages(clay, nil)
+	p.loopAt, p.loopTo = 400, 50
+	loop := p.stages(stiffLoop, nil)
+	// The loop follows its stress of 400 kPa; move it onto the disturbed curve.
+	at := 6
+	shift := stages[at-1].VoidRatio.Value - loop[at-1].VoidRatio.Value
+	var all []Stage
+	all = append(all, stages[:at]...)
+	for _, s := range loop[at : len(loop)-(len(stages)-at)] {
+		s.VoidRatio.Value += shift
+		all = append(all, s)
+	}
+	all = append(all, stages[at:]...)
+	c, err := Prepare(Record{InitialVoidRatio: Known(1.4), Stages: all})
+	if err != nil {
+		t.Fatal(err)
+	}
+	got := interpret(t, c, Situation{})
+	if !strings.Contains(strings.Join(got.Notes, "\n"), "times as steep as the loop") {
+		t.Errorf("notes %q with Cr %.3f from %s", got.Notes, got.RecompressionIndex.Value, got.RecompressionIndex.How)
 	}
 }

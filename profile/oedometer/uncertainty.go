@@ -2,7 +2,9 @@ package oedometer
 
 import "math"
 
-// How the parts of the uncertainty are weighed. Measured on generated curves.
+// How the parts of the uncertainty are weighed. Set on generated curves, on the
+// cautious side: the 5–95 % range holds the truth of clean ones in 95 to 100 %,
+// as real curves are rougher, and of structured ones in 80 to 90 %.
 const (
 	modelScatter   = 0.025 // of the combined value itself, natural log
 	shapeScatter   = 0.4   // of the correction for flattening, per unit of it
