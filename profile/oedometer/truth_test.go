@@ -52,7 +52,7 @@ func try(t testing.TB, f family, seed int64, n int) score {
 		}
 		got := interpret(t, c, Situation{EffectiveStress: Known(inSitu)})
 		if f.kind != short {
-			factsOfTheTrade(t, c, got)
+			factsOfTheTrade(t, c, got, p.noise)
 		}
 		for _, m := range got.Methods {
 			if m.Known {
