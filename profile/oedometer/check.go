@@ -62,8 +62,9 @@ func checkStages(r Record, problems *Problems) {
 // checkMonotony reports a specimen that rises under load or sinks when load is
 // taken off, and recognizes swelling when water was added.
 func checkMonotony(c *Curve, problems *Problems) {
-	for i := 1; i < len(c.Points); i++ {
-		p, before := c.Points[i], c.Points[i-1]
+	points := spaced(c.Points)
+	for i := 1; i < len(points); i++ {
+		p, before := points[i], points[i-1]
 		rise := p.VoidRatio - before.VoidRatio
 		same := math.Abs(p.EffectiveStress/before.EffectiveStress-1) <= reversal
 		switch {
@@ -74,7 +75,7 @@ func checkMonotony(c *Curve, problems *Problems) {
 					"a void ratio that rises or stays on unloading"})
 			}
 		case rise <= readingTolerance:
-		case swells(c, i, same):
+		case swells(c, p, same):
 			// The strain of swelling is counted from the initial height.
 			strain := 100 * rise / (1 + c.InitialVoidRatio)
 			c.Swelling = math.Max(c.Swelling, strain)
@@ -92,11 +93,27 @@ func checkMonotony(c *Curve, problems *Problems) {
 	checkLoops(c)
 }
 
-// swells reports whether the rise into point i is the specimen taking up water:
+// spaced returns the points of a dense record that lie more than a reversal of
+// stress apart: between closer ones a slow rise hides in the noise, and a jump
+// looks like swelling at constant stress.
+func spaced(points []Point) []Point {
+	if len(points) <= denseCount {
+		return points
+	}
+	kept := points[:1:1]
+	for _, p := range points[1:] {
+		last := kept[len(kept)-1]
+		if p.Branch != last.Branch || math.Abs(p.EffectiveStress/last.EffectiveStress-1) > reversal {
+			kept = append(kept, p)
+		}
+	}
+	return kept
+}
+
+// swells reports whether the rise to point p is the specimen taking up water:
 // at a stage said to be inundated, at constant stress, or up to above its initial
 // height under a small stress.
-func swells(c *Curve, i int, same bool) bool {
-	p := c.Points[i]
+func swells(c *Curve, p Point, same bool) bool {
 	if c.stages[p.Stage].Inundated || same && p.Branch != Unloading {
 		return true
 	}
@@ -107,13 +124,14 @@ func swells(c *Curve, i int, same bool) bool {
 // earlier stress the void ratio is at most that of first loading, common practice.
 func checkLoops(c *Curve) {
 	const tolerance = 0.003
-	peak := Point{}
+	peak, said := Point{}, false
 	for _, p := range c.Points {
 		switch p.Branch {
 		case FirstLoading, FurtherLoading:
-			peak = p
+			peak, said = p, false
 		case Reloading:
-			if math.Abs(p.EffectiveStress/peak.EffectiveStress-1) < reversal && p.VoidRatio > peak.VoidRatio+tolerance {
+			if !said && math.Abs(p.EffectiveStress/peak.EffectiveStress-1) < reversal && p.VoidRatio > peak.VoidRatio+tolerance {
+				said = true // once per loop: a dense record has many readings there
 				c.add(p.Stage, "reload above first loading", fmt.Sprintf("back at %.4g kPa the void ratio is %.3f, above the %.3f of first loading: reading error or a reset dial", p.EffectiveStress, p.VoidRatio, peak.VoidRatio))
 			}
 		}
@@ -123,16 +141,21 @@ func checkLoops(c *Curve) {
 // checkKinds compares the kind of stage that was written down with the branch
 // that the stresses show.
 func checkKinds(r Record, c *Curve) {
-	for i := range c.Points {
-		p := &c.Points[i]
+	wrote, shown := "", FirstLoading // of the last disagreement, said once per run of stages
+	for _, p := range c.Points {
 		written := r.Stages[p.Stage].Kind
 		found := p.Branch
 		agree := written == "" ||
 			written == "load" && found != Unloading ||
 			written == "unload" && found == Unloading ||
 			written == "reload" && (found == Reloading || found == FurtherLoading)
-		if !agree {
+		if agree {
+			wrote = ""
+			continue
+		}
+		if written != wrote || found != shown {
 			c.add(p.Stage, "stage kind", fmt.Sprintf("written down as %q, but the stresses show %s", written, found))
 		}
+		wrote, shown = written, found
 	}
 }

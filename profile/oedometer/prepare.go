@@ -43,6 +43,8 @@ func Prepare(r Record) (Curve, error) {
 	for i, s := range r.Stages {
 		e, known := voidRatio(i, s, r, curve.InitialVoidRatio, solids, &problems)
 		switch {
+		case !known && i > 0 && !r.Stages[i-1].read():
+			// Said once for a run of steps.
 		case !known:
 			curve.add(i, "missing step", fmt.Sprintf("no void ratio, strain or height at %.4g kPa; the step is left out", s.EffectiveStress))
 		case s.EffectiveStress == 0:
@@ -67,6 +69,9 @@ func Prepare(r Record) (Curve, error) {
 	}
 	return curve, nil
 }
+
+// read reports whether the stage has any reading.
+func (s Stage) read() bool { return s.VoidRatio.Known || s.Strain.Known || s.Height.Known }
 
 // add appends a finding.
 func (c *Curve) add(stage int, rule, message string) {

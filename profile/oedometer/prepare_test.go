@@ -179,6 +179,44 @@ func TestFindings(t *testing.T) {
 	}
 }
 
+// A gauge that is reset, or that drifts, in the middle of a constant-rate record.
+func TestDenseRecordRises(t *testing.T) {
+	for name, rise := range map[string]func(i int) float64{
+		"reset":  func(i int) float64 { return 0.05 * math.Min(1, math.Max(0, float64(i-1000))) },
+		"drifts": func(i int) float64 { return 0.002 * math.Max(0, float64(i-1000)) },
+	} {
+		r := Record{InitialVoidRatio: Known(1.2), Kind: ConstantRate}
+		for i := range 1200 {
+			s := 10 * math.Pow(10, float64(i)/700)
+			r.Stages = append(r.Stages, Stage{EffectiveStress: s, VoidRatio: Known(1.2 - 0.1*math.Log10(s/10) + rise(i))})
+		}
+		_, err := Prepare(r)
+		var problems Problems
+		if !errors.As(err, &problems) || problems[0].Stage < 1000 || problems[0].Stage > 1020 || problems[0].Quantity != "void ratio" {
+			t.Errorf("%s: %v, want a rise under load near stage 1,001", name, err)
+		}
+	}
+}
+
+// What holds for a run of stages is said once: a dense record has thousands.
+func TestFindingsAreNotRepeated(t *testing.T) {
+	r := Record{InitialVoidRatio: Known(1)}
+	for i := range 1000 {
+		s := Stage{EffectiveStress: 10 + float64(i), Kind: "unload"}
+		if i < 300 || i > 600 {
+			s.VoidRatio = Known(0.95 - 0.0001*float64(i))
+		}
+		r.Stages = append(r.Stages, s)
+	}
+	c, err := Prepare(r)
+	if err != nil {
+		t.Fatal(err)
+	}
+	if len(c.Findings) != 2 {
+		t.Errorf("%d findings, want one missing run and one wrong kind: %v", len(c.Findings), c.Findings)
+	}
+}
+
 func TestSwellingStrain(t *testing.T) {
 	c, err := Prepare(change(func(r *Record) {
 		r.Stages = append([]Stage{{EffectiveStress: 12.5, VoidRatio: Known(1.19)}, {EffectiveStress: 12.5, VoidRatio: Known(1.234)}}, r.Stages[1:]...)
