@@ -94,6 +94,7 @@ names, or a single CSV of results with depth. Start with:
 		newDecideCommand(),
 		newExplainCommand(),
 		newVerifyCommand(),
+		newCompareCommand(),
 	)
 	for _, c := range append(root.Commands(), root) {
 		c.Args = usageArgs(c.Args)
