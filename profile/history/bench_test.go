@@ -25,7 +25,7 @@ func madeUp(n, q int) Input {
 
 func BenchmarkInfer(b *testing.B) {
 	for _, n := range []int{5, 10, 15, 20, 30, 40} {
-		b.Run(fmt.Sprintf("tests=%d/stations=200", n), func(b *testing.B) {
+		b.Run(fmt.Sprintf("tests=%d", n), func(b *testing.B) {
 			in := madeUp(n, 200)
 			for b.Loop() {
 				if _, err := Infer(in); err != nil {
@@ -34,7 +34,7 @@ func BenchmarkInfer(b *testing.B) {
 			}
 		})
 	}
-	b.Run("tests=15/stations=200/readings=3x30", func(b *testing.B) {
+	b.Run("sources=3x30", func(b *testing.B) {
 		in := withReadings(madeUp(15, 200), 30)
 		for b.Loop() {
 			if _, err := Infer(in); err != nil {

@@ -35,6 +35,20 @@ func finite(values ...float64) bool {
 	return true
 }
 
+// mostSD is the largest standard deviation of a logarithm that makes sense: a
+// factor of e⁵ either way.
+const mostSD = 5.0
+
+// spread tells whether all values are standard deviations of logarithms.
+func spread(values ...float64) bool {
+	for _, v := range values {
+		if !(v >= 0 && v <= mostSD) {
+			return false
+		}
+	}
+	return true
+}
+
 // check returns an error for input that no answer can rest on.
 func (in *Input) check() error {
 	bad := func(format string, args ...any) error {
@@ -50,9 +64,9 @@ func (in *Input) check() error {
 	}
 	tests := func(what string, ts []Test) error {
 		for i, t := range ts {
-			if !finite(t.Depth, t.EffectiveStress, t.Preconsolidation, t.LnSD, t.Disturbance) ||
-				t.Preconsolidation <= 0 || t.LnSD < 0 || t.Disturbance < 0 || t.Layer < 0 || t.Layer >= len(in.Layers) {
-				return bad("%s %d at %g m: σ′p %g kPa, sd %g, layer %d; want finite numbers, σ′p above zero and a layer of the list",
+			if !finite(t.Depth, t.EffectiveStress, t.Preconsolidation) || !spread(t.LnSD, t.Disturbance) ||
+				t.Preconsolidation <= 0 || t.Kind < Exact || t.Kind > AtMost || t.Layer < 0 || t.Layer >= len(in.Layers) {
+				return bad("%s %d at %g m: σ′p %g kPa, sd %g, layer %d; want finite numbers, σ′p above zero, an sd of at most 5 and a layer of the list",
 					what, i, t.Depth, t.Preconsolidation, t.LnSD, t.Layer)
 			}
 		}
@@ -65,14 +79,14 @@ func (in *Input) check() error {
 		return err
 	}
 	for i, r := range in.Readings {
-		if !finite(r.Depth, r.EffectiveStress, r.Preconsolidation, r.BetweenSD, r.WithinSD) || r.Preconsolidation <= 0 ||
-			r.BetweenSD < 0 || r.WithinSD < 0 || r.Layer < 0 || r.Layer >= len(in.Layers) {
+		if !finite(r.Depth, r.EffectiveStress, r.Preconsolidation) || !spread(r.BetweenSD, r.WithinSD) || r.Preconsolidation <= 0 ||
+			r.Layer < 0 || r.Layer >= len(in.Layers) {
 			return bad("reading %d (%s) at %g m: σ′p %g kPa, layer %d; want finite numbers, σ′p above zero and a layer of the list",
 				i, r.Source, r.Depth, r.Preconsolidation, r.Layer)
 		}
 	}
 	for i, s := range in.Stations {
-		if !finite(s.Depth, s.EffectiveStress, s.LnSD) || s.LnSD < 0 || s.Layer < 0 || s.Layer >= len(in.Layers) {
+		if !finite(s.Depth, s.EffectiveStress) || !spread(s.LnSD) || s.Layer < 0 || s.Layer >= len(in.Layers) {
 			return bad("station %d at %g m: σ′v0 %g kPa, sd %g, layer %d; want finite numbers and a layer of the list",
 				i, s.Depth, s.EffectiveStress, s.LnSD, s.Layer)
 		}
@@ -93,8 +107,8 @@ func (in *Input) check() error {
 	if in.Limits[0] >= in.Limits[1] || in.Limits[1] >= in.Limits[2] {
 		return bad("limits of OCR %v; want them to rise", in.Limits)
 	}
-	if !finite(in.WaterTable, in.WaterUnitWeight, in.BuoyantUnitWeight, in.NeighbourBetweenSD) ||
-		in.WaterUnitWeight <= 0 || in.BuoyantUnitWeight <= 0 || in.NeighbourBetweenSD < 0 {
+	if !finite(in.WaterTable, in.WaterUnitWeight, in.BuoyantUnitWeight) || !spread(in.NeighbourBetweenSD) ||
+		in.WaterUnitWeight <= 0 || in.BuoyantUnitWeight <= 0 {
 		return bad("water table %g m, unit weights %g and %g kN/m³; want finite numbers, weights above zero",
 			in.WaterTable, in.WaterUnitWeight, in.BuoyantUnitWeight)
 	}

@@ -3,12 +3,15 @@ package history
 import "math"
 
 // A test conflicts when it is further from what the others say than this many
-// of the standard deviations that judge it, and is doubtful beyond the second.
-// The first was set where one test in a hundred that nobody touched is called
-// conflicting on natural clays.
+// of the standard deviations that judge it, and all the evidence together makes
+// it this many times as probable to be wild as any test is: the good neighbour
+// of a wrong test does not suffer for it. It is doubtful beyond the second
+// limit. The limits were set where one untouched test in a hundred conflicts on
+// natural clays.
 const (
-	conflictAt = 3.15
-	doubtAt    = 2.0
+	conflictAt   = 3.0
+	conflictWild = 4.0
+	doubtAt      = 2.0
 )
 
 // judgingSD is the standard deviation that a difference is judged by. The one
@@ -20,10 +23,11 @@ func judgingSD(predicted, grade float64) float64 {
 	return math.Cbrt(predicted * grade * grade)
 }
 
-// verdict returns the verdict on a normal score and a judged difference.
-func verdict(z, judged float64) string {
+// verdict returns the verdict on a normal score, a judged difference, and how
+// many times as probable as before it is that the test is wild.
+func verdict(z, judged, wild float64) string {
 	switch {
-	case judged > conflictAt:
+	case judged > conflictAt && wild > conflictWild:
 		return Conflicts
 	case judged > doubtAt && math.Abs(z) > 1.645:
 		return Doubtful
@@ -44,7 +48,7 @@ func (l *layer) tellTest(i int, t *Test, out *TestResult) {
 	out.Z = quantile(math.Min(math.Max(m.below(value), certain), 1-certain))
 	out.Judged = math.Abs(value-b.Best) / judgingSD((b.High-b.Low)/(2*1.645), sd)
 	out.Wild = l.post.wild[i]
-	out.Verdict = verdict(out.Z, out.Judged)
+	out.Verdict = verdict(out.Z, out.Judged, out.Wild/l.model.Wild)
 	here := l.lines[len(l.stations)+i]
 	out.Influence = math.Abs(here.at(0.5) - b.Best)
 }

@@ -40,6 +40,7 @@ func (in *Input) sourcesOf(l int) []source {
 			if s.between == 0 {
 				s.between = usualBetween
 			}
+			s.between = math.Max(s.between, leastSD)
 			out = append(out, s)
 		}
 		w := r.WithinSD
@@ -48,7 +49,7 @@ func (in *Input) sourcesOf(l int) []source {
 		}
 		out[i].depth = append(out[i].depth, r.Depth)
 		out[i].value = append(out[i].value, math.Log(r.Preconsolidation))
-		out[i].within = append(out[i].within, w)
+		out[i].within = append(out[i].within, math.Max(w, leastSD))
 	}
 	sort.SliceStable(out, func(i, j int) bool { return out[i].name < out[j].name })
 	return out

@@ -124,9 +124,7 @@ func (l *layer) infer(k *constants) error {
 		l.rows = l.buildRows(k, true)
 		depth := append([]float64(nil), l.rows.depth...)
 		effective := append([]float64(nil), l.rows.effective...)
-		for _, z := range l.outputs() {
-			depth = append(depth, z)
-		}
+		depth = append(depth, l.outputs()...)
 		for _, i := range l.stations {
 			effective = append(effective, l.mendedAt(l.in.Stations[i].Depth, l.in.Stations[i].EffectiveStress))
 		}
@@ -190,6 +188,10 @@ func (t *Test) observation() (value, sd float64) {
 	if sd == 0 {
 		sd = LnSDForGrade("")
 	}
+	sd = math.Max(sd, leastSD)
 	mean := math.Sqrt(2 / math.Pi)
 	return math.Log(t.Preconsolidation) + mean*t.Disturbance, math.Hypot(sd, math.Sqrt(1-mean*mean)*t.Disturbance)
 }
+
+// leastSD is the smallest sd of ln σ′p that anything is believed to have.
+const leastSD = 0.01

@@ -14,7 +14,6 @@ const enough = 0.98
 // normal with its own mean and covariance, in which a new observation with
 // variance s² at depth i takes C_ij²/(C_ii + s²) from the variance at j.
 func nextTest(layers []*layer) NextTest {
-	type candidate struct{ saved, width float64 }
 	var out NextTest
 	all, best := 0.0, 0.0
 	for _, l := range layers {

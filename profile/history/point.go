@@ -30,10 +30,22 @@ func (l *layer) tell(out *Result) {
 		out.Notes = append(out.Notes, l.name()+": no test of σ′p; the profile rests on correlations alone, which err as a whole for a site")
 	case n == 0 && len(l.near) > 0:
 		out.Notes = append(out.Notes, l.name()+": no test of σ′p here; the profile rests on neighbouring boreholes")
+	case n == 0 && len(l.bounds) > 0:
+		out.Notes = append(out.Notes, l.name()+": no test of σ′p but bounds; the profile is what is usual in such ground, cut to them")
 	case n == 0:
 		out.Notes = append(out.Notes, l.name()+": no evidence of σ′p; the profile is what is usual in such ground and no more")
 	case n == 1:
 		out.Notes = append(out.Notes, l.name()+": one test of σ′p; the scatter of tests here is not known")
+	}
+	conflicting := 0
+	for _, t := range l.tests {
+		if out.Tests[t].Verdict == Conflicts {
+			conflicting++
+		}
+	}
+	if conflicting > 1 && 3*conflicting >= len(l.tests) {
+		out.Notes = append(out.Notes, fmt.Sprintf("%s: %d of %d tests conflict with the rest; which of them are right is not certain, and the band may be too narrow",
+			l.name(), conflicting, len(l.tests)))
 	}
 }
 

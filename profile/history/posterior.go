@@ -62,6 +62,11 @@ type posterior struct {
 // out of a mixture; the others then add to one.
 const smallestGroup = 1e-4
 
+// smallestPair is the share of a node's wild sets from which a pair is thought
+// of when a third test is left out. Without one, of the many pairs that mean
+// little, the leave-one-out values take no notice.
+const smallestPair = 0.01
+
 // smallestNode is the weight below which a node under a setting is left out.
 const smallestNode = 1e-6
 
@@ -111,7 +116,18 @@ func (m *model) fit(r *rows, sv solved) underSetting {
 				}
 			}
 		}
-		u.nodes[n] = fitted{node: n, combination: c, wildSum: sumWild(sets, r.tests)}
+		sum := sumWild(sets, r.tests)
+		for x := r.tests + 1; x < len(sets); x++ {
+			if s := &sets[x]; s.log+math.Log(s.factor) > sum.logAll+math.Log(smallestPair) {
+				for i := range r.tests {
+					if s.first != i && s.second != i {
+						mean, variance, log, factor := c.without(r.tests, s, i, r.value[i])
+						u.expected[i][m.nodes[n].mechanism].add(log+prior, factor, mean, variance)
+					}
+				}
+			}
+		}
+		u.nodes[n] = fitted{node: n, combination: c, wildSum: sum}
 		u.nodes[n].logAll += prior
 	}
 	return u

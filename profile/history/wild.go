@@ -47,7 +47,7 @@ func (c *combination) wildSets(tests int, k *constants, out []wildSet) []wildSet
 }
 
 // without returns what the other rows say of a good test i when the set, which
-// holds at most one other test, is wild: mean and variance of its value, and
+// does not hold it, is wild: mean and variance of its value, and
 // the likelihood of the others as factor·e^log. It follows from C⁻¹ alone: the
 // mean is the value less (C⁻¹residual)_i/(C⁻¹)_ii, the variance 1/(C⁻¹)_ii.
 func (c *combination) without(tests int, w *wildSet, i int, value float64) (mean, variance, log, factor float64) {
@@ -56,6 +56,11 @@ func (c *combination) without(tests int, w *wildSet, i int, value float64) (mean
 		pij := c.precision[i*tests+w.first]
 		a -= pij * w.g1
 		p -= pij * pij * w.m11
+		if w.second >= 0 {
+			pik := c.precision[i*tests+w.second]
+			a -= pik * w.g2
+			p -= 2*pij*pik*w.m12 + pik*pik*w.m22
+		}
 	}
 	variance = 1 / p
 	d := a * variance

@@ -47,15 +47,37 @@ func (l *layer) boundary(points []Point, at []int, k int) Band {
 		limit = l.in.Limits[a.Zone]
 	}
 	best := crossing(a.Depth, b.Depth, a.OCR.Best, b.OCR.Best, limit)
-	holds := func(i int) bool { o := points[at[i]].OCR; return o.Low < limit && limit < o.High }
 	out := Band{best, best, best}
-	for i := k - 1; i >= 0 && holds(i); i-- {
-		out.Low = points[at[i]].Depth
+	for i := k - 1; i >= 0; i-- {
+		z, outside := edge(points[at[i]], points[at[i+1]], limit)
+		out.Low = math.Min(out.Low, z)
+		if outside {
+			break
+		}
 	}
-	for i := k; i < len(at) && holds(i); i++ {
-		out.High = points[at[i]].Depth
+	for i := k; i < len(at); i++ {
+		z, outside := edge(points[at[i]], points[at[i-1]], limit)
+		out.High = math.Max(out.High, z)
+		if outside {
+			break
+		}
 	}
 	return out
+}
+
+// edge returns how far towards a station the band holds a limit that it holds
+// somewhere before the next one: to the station, or to where a side of the band
+// crosses the limit, and then the station is outside.
+func edge(p, next Point, limit float64) (depth float64, outside bool) {
+	switch {
+	case p.OCR.Low >= limit && next.OCR.Low < limit:
+		return crossing(p.Depth, next.Depth, p.OCR.Low, next.OCR.Low, limit), true
+	case p.OCR.High <= limit && next.OCR.High > limit:
+		return crossing(p.Depth, next.Depth, p.OCR.High, next.OCR.High, limit), true
+	case p.OCR.Low < limit && limit < p.OCR.High:
+		return p.Depth, false
+	}
+	return next.Depth, true
 }
 
 // crossing returns where ln OCR, straight between two depths, meets a limit.
