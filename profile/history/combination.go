@@ -4,7 +4,6 @@ import (
 	"math"
 
 	"gonum.org/v1/gonum/floats"
-	"gonum.org/v1/gonum/mat"
 )
 
 // combination is one node under one setting with every test taken as good: a
@@ -64,39 +63,68 @@ func (r *rows) combine(sv *solved, ln *line) combination {
 // parameters computes the posterior of the parameters within their cells, and
 // returns ln det(I + JᵀPJ).
 func (c *combination) parameters(n, p int) float64 {
-	m := mat.NewSymDense(p, nil)
+	m := make([]float64, p*p)
 	b := make([]float64, p)
-	for k := range p {
-		for i := range n {
-			b[k] += c.pj[i*p+k] * c.residual[i]
-		}
-		for l := k; l < p; l++ {
-			v := 0.0
-			for i := range n {
-				v += c.slope[k][i] * c.pj[i*p+l]
+	for i := range n {
+		row := c.pj[i*p : i*p+p]
+		for k := range p {
+			b[k] += row[k] * c.residual[i]
+			for l := range k + 1 {
+				m[k*p+l] += c.slope[k][i] * row[l]
 			}
-			if k == l {
-				v++
-			}
-			m.SetSym(k, l, v)
 		}
 	}
-	var chol mat.Cholesky
-	var inverse mat.SymDense
-	// I + JᵀPJ is positive definite however the rounding falls, unless the
-	// precision is so large that nothing is left of the unit matrix.
-	if !chol.Factorize(m) || chol.InverseTo(&inverse) != nil {
-		c.inner = make([]float64, p*p)
-		return math.Inf(1)
+	for k := range p {
+		m[k*p+k]++
 	}
 	c.inner = make([]float64, p*p)
+	logDet := invert(m, c.inner, p)
 	for k := range p {
-		for l := range p {
-			c.inner[k*p+l] = inverse.At(k, l)
-			c.step[k] += c.inner[k*p+l] * b[l]
+		c.step[k] = dot(c.inner[k*p:k*p+p], b)
+	}
+	return logDet
+}
+
+// invert inverts a positive definite matrix of the few parameters of a
+// mechanism, given by its lower triangle, and returns ln det. gonum's factor
+// would be mostly overhead at this size.
+func invert(m, out []float64, p int) float64 {
+	det := 1.0
+	for k := range p { // Cholesky factor, in place
+		for l := range k + 1 {
+			sum := m[k*p+l]
+			for j := range l {
+				sum -= m[k*p+j] * m[l*p+j]
+			}
+			if k == l {
+				m[k*p+k] = math.Sqrt(sum)
+				det *= sum
+			} else {
+				m[k*p+l] = sum / m[l*p+l]
+			}
 		}
 	}
-	return chol.LogDet()
+	var x [3]float64
+	for col := range p {
+		for k := range p {
+			sum := 0.0
+			if k == col {
+				sum = 1
+			}
+			for j := range k {
+				sum -= m[k*p+j] * x[j]
+			}
+			x[k] = sum / m[k*p+k]
+		}
+		for k := p - 1; k >= 0; k-- {
+			for j := k + 1; j < p; j++ {
+				x[k] -= m[j*p+k] * x[j]
+			}
+			x[k] /= m[k*p+k]
+			out[k*p+col] = x[k]
+		}
+	}
+	return math.Log(det)
 }
 
 // dot returns the inner product of a with the head of b.

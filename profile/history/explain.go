@@ -69,7 +69,7 @@ func (l *layer) sentence(r *LayerResult, low, high float64) string {
 		if next := r.Mechanisms[1]; next.Probability >= 0.1 {
 			text += fmt.Sprintf(" Next is %s (%.2f).", next.Name, next.Probability)
 		}
-		return text
+		return text + " Geology has to confirm it."
 	}
 	var named []string
 	for _, m := range r.Mechanisms {
@@ -97,6 +97,10 @@ func (m *Mechanism) sizes(g *ground) string {
 		return fmt.Sprintf("about %.1f m of ground (%.1f to %.1f m) taken away if it lay below water (%.1f kN/m³ buoyant), %.1f m (%.1f to %.1f m) if above (%.1f kN/m³)",
 			p.Best, p.Low, p.High, g.buoyant, p.Best*dry, p.Low*dry, p.High*dry, g.buoyant+g.gamma)
 	}
+	assumed := ""
+	if m.Name == FormerLowerWater && !g.waterKnown {
+		assumed = " below ground level, where the water is taken to stand today"
+	}
 	unit := ""
 	if p.Unit != "" {
 		unit = " " + p.Unit
@@ -105,7 +109,7 @@ func (m *Mechanism) sizes(g *ground) string {
 	if p.Unit == "" {
 		digits = 2
 	}
-	return fmt.Sprintf("%s %.*f%s (%.*f to %.*f)", p.Name, digits, p.Best, unit, digits, p.Low, digits, p.High)
+	return fmt.Sprintf("%s %.*f%s (%.*f to %.*f)%s", p.Name, digits, p.Best, unit, digits, p.Low, digits, p.High, assumed)
 }
 
 // sourceResults says what σ′p is over what each source predicts.

@@ -96,7 +96,7 @@ func (in *Input) gather(index int) *layer {
 	}
 	l.ground.base = math.Max(l.ground.base, l.ground.top+0.1)
 	if in.HasWater {
-		l.ground.water = in.WaterTable
+		l.ground.water, l.ground.waterKnown = in.WaterTable, true
 	}
 	return l
 }

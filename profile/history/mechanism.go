@@ -17,10 +17,11 @@ const (
 
 // ground is what a mechanism needs to know of the layer it acts in.
 type ground struct {
-	top, base float64 // m; the base is below the top
-	water     float64 // depth of the present water level, m
-	gamma     float64 // unit weight of water, kN/m³
-	buoyant   float64 // buoyant unit weight of ground that is gone, kN/m³
+	top, base  float64 // m; the base is below the top
+	water      float64 // depth of the present water level, m; ground level where it is not known
+	waterKnown bool
+	gamma      float64 // unit weight of water, kN/m³
+	buoyant    float64 // buoyant unit weight of ground that is gone, kN/m³
 }
 
 // inside returns how deep a depth lies in the layer, from 0 to 1.

@@ -20,9 +20,10 @@ func (l *layer) tell(out *Result) {
 		out.Tests[t] = TestResult{ID: l.in.Tests[t].ID}
 		l.tellBound(&l.in.Tests[t], &l.lines[len(l.stations)+len(l.tests)+i], &out.Tests[t])
 	}
-	for j, i := range l.stations {
+	sideBySide(len(l.stations), func(j int) {
+		i := l.stations[j]
 		out.Points[i] = l.in.point(i, &l.lines[j])
-	}
+	})
 	out.Zones = append(out.Zones, l.zones(out.Points)...)
 	out.Layers = append(out.Layers, l.explain())
 	switch n := len(l.tests); {

@@ -2,7 +2,9 @@ package history
 
 import (
 	"math"
+	"runtime"
 	"sync"
+	"sync/atomic"
 )
 
 // A tally sums weighted moments. Weights are factor·e^log; the largest log so
@@ -67,8 +69,12 @@ const smallestGroup = 1e-4
 // little, the leave-one-out values take no notice.
 const smallestPair = 0.01
 
+// hopeless is the log ratio to the best node so far under a setting below which
+// a node is not worked out.
+const hopeless = -35.0
+
 // smallestNode is the weight below which a node under a setting is left out.
-const smallestNode = 1e-6
+const smallestNode = 1e-5
 
 // infer averages over all nodes, settings and wild sets. Settings are worked
 // side by side and summed in their order, so that the bytes do not change. It
@@ -77,17 +83,11 @@ func (m *model) infer(r *rows) *posterior {
 	p := &posterior{rows: r, model: m}
 	settings := m.settings(len(r.indirect))
 	p.settings = make([]underSetting, len(settings))
-	var wait sync.WaitGroup
-	for i, s := range settings {
-		wait.Add(1)
-		go func() {
-			defer wait.Done()
-			if sv, ok := r.solve(m.constants, s); ok {
-				p.settings[i] = m.fit(r, sv)
-			}
-		}()
-	}
-	wait.Wait()
+	sideBySide(len(settings), func(i int) {
+		if sv, ok := r.solve(m.constants, settings[i]); ok {
+			p.settings[i] = m.fit(r, sv)
+		}
+	})
 	if !p.weigh() {
 		return nil
 	}
@@ -96,17 +96,39 @@ func (m *model) infer(r *rows) *posterior {
 	return p
 }
 
+// sideBySide calls work for every index below n on as many goroutines as there
+// are processors. Each call writes to places of its own.
+func sideBySide(n int, work func(i int)) {
+	var next atomic.Int64
+	var wait sync.WaitGroup
+	for range min(n, runtime.GOMAXPROCS(0)) {
+		wait.Go(func() {
+			for i := int(next.Add(1)) - 1; i < n; i = int(next.Add(1)) - 1 {
+				work(i)
+			}
+		})
+	}
+	wait.Wait()
+}
+
 // fit works all nodes under one setting.
 func (m *model) fit(r *rows, sv solved) underSetting {
-	u := underSetting{solved: sv, nodes: make([]fitted, len(m.lines)), expected: make([][]tally, r.tests)}
+	u := underSetting{solved: sv, expected: make([][]tally, r.tests)}
 	for i := range u.expected {
 		u.expected[i] = make([]tally, len(m.mechanisms))
 	}
 	var sets []wildSet
+	best := math.Inf(-1)
 	for n := range m.lines {
 		c := r.combine(&sv, &m.lines[n])
 		sets = c.wildSets(r.tests, m.constants, sets)
 		prior := sv.logPrior + m.nodes[n].logPrior
+		// A node that no set of wild tests saves is hopeless without any one test
+		// as well: leaving it out is no more than taking it as wild.
+		log := highest(sets) + prior
+		if best = math.Max(best, log); log < best+hopeless {
+			continue
+		}
 		for i := range r.tests {
 			t := &u.expected[i][m.nodes[n].mechanism]
 			for x := range r.tests + 1 {
@@ -127,8 +149,8 @@ func (m *model) fit(r *rows, sv solved) underSetting {
 				}
 			}
 		}
-		u.nodes[n] = fitted{node: n, combination: c, wildSum: sum}
-		u.nodes[n].logAll += prior
+		sum.logAll += prior
+		u.nodes = append(u.nodes, fitted{node: n, combination: c, wildSum: sum})
 	}
 	return u
 }

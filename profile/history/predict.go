@@ -3,7 +3,6 @@ package history
 import (
 	"math"
 	"sort"
-	"sync"
 )
 
 // moments are those of ln σ′p at a depth in one mechanism under one setting.
@@ -13,25 +12,20 @@ type moments struct{ weight, mean, square float64 }
 // those of the rows.
 func (p *posterior) predict(depths []float64) []mixture {
 	groups := make([][]moments, len(p.settings)*len(p.model.mechanisms)) // nil where empty
-	var wait sync.WaitGroup
-	for s := range p.settings {
-		wait.Add(1)
-		go func() {
-			defer wait.Done()
-			u := &p.settings[s]
-			if len(u.nodes) > 0 {
-				gain, left := p.gain(u, depths)
-				for i := range u.nodes {
-					g := &groups[s*len(p.model.mechanisms)+p.model.nodes[u.nodes[i].node].mechanism]
-					if *g == nil {
-						*g = make([]moments, len(depths))
-					}
-					p.spread(&u.nodes[i], gain, left, *g)
-				}
+	sideBySide(len(p.settings), func(s int) {
+		u := &p.settings[s]
+		if len(u.nodes) == 0 {
+			return
+		}
+		gain, left := p.gain(u, depths)
+		for i := range u.nodes {
+			g := &groups[s*len(p.model.mechanisms)+p.model.nodes[u.nodes[i].node].mechanism]
+			if *g == nil {
+				*g = make([]moments, len(depths))
 			}
-		}()
-	}
-	wait.Wait()
+			p.spread(&u.nodes[i], gain, left, *g)
+		}
+	})
 	out := make([]mixture, len(depths))
 	for j := range depths {
 		for _, g := range groups {

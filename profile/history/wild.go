@@ -78,12 +78,20 @@ type wildSum struct {
 // negligible is the log ratio below which a term is not added to a sum.
 const negligible = -30.0
 
-// sumWild averages over the sets.
-func sumWild(sets []wildSet, tests int) wildSum {
+// highest returns the largest log of the sets.
+func highest(sets []wildSet) float64 {
 	top := math.Inf(-1)
 	for i := range sets {
-		top = math.Max(top, sets[i].log)
+		if sets[i].log > top {
+			top = sets[i].log
+		}
 	}
+	return top
+}
+
+// sumWild averages over the sets.
+func sumWild(sets []wildSet, tests int) wildSum {
+	top := highest(sets)
 	out := wildSum{share: make([]float64, tests), shift: make([]float64, tests), more: make([]float64, tests*tests)}
 	total := 0.0
 	for x := range sets {

@@ -253,7 +253,7 @@ def main():
         ms = mechanisms(site)
         z, s = zip(*site["stations"])
         full = run(site, z, s)
-        probability, lines, sizes = combine(full, len(ms), 1e-6)
+        probability, lines, sizes = combine(full, len(ms), 1e-5)
         expected = []
         for i, (zt, st, p, sd) in enumerate(site["tests"]):
             # The test that is left out is good. Of the others one is wild, or a
