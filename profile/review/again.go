@@ -44,7 +44,7 @@ func (c *context) reviewed() Findings {
 		}
 		site = copySite(site)
 		found[i].fix(site)
-		p, err := profile.Build(sorted(site), profile.Options{})
+		p, err := profile.Build(c.around(site, found), profile.Options{})
 		if err != nil {
 			break // what was seen so far stands
 		}
@@ -54,12 +54,49 @@ func (c *context) reviewed() Findings {
 	return append(causes, found...)
 }
 
-// sorted returns a copy of a site with its results by depth; the site itself
-// keeps their order, by which corrections find them.
-func sorted(s *profile.Site) *profile.Site {
+// neighbours is how many boreholes besides those in question are built again, so
+// that a look at a large site costs what one at a small site does.
+const neighbours = 6
+
+// around returns the part of a site that the findings in question hang on, with
+// its results by depth; the site itself keeps their order, by which corrections
+// find them.
+func (c *context) around(s *profile.Site, found Findings) *profile.Site {
+	asked, strata := map[string]bool{}, map[string]bool{}
+	for i := range found {
+		f := &found[i]
+		if f.echoes() || f.fix != nil {
+			for _, p := range f.places() {
+				asked[p.Borehole] = true
+			}
+		}
+	}
+	for i := range s.Boreholes {
+		if b := &s.Boreholes[i]; asked[b.Name] {
+			for j := range b.Strata {
+				strata[b.Strata[j].Name] = true
+			}
+		}
+	}
 	out := copySite(s)
-	for i := range out.Boreholes {
-		slices.SortStableFunc(out.Boreholes[i].Results, func(a, b profile.Result) int { return cmp.Compare(a.Depth.Value, b.Depth.Value) })
+	out.Boreholes, out.Curves = nil, nil
+	more := neighbours
+	for _, b := range copySite(s).Boreholes {
+		shares := slices.ContainsFunc(b.Strata, func(x profile.Stratum) bool { return x.Name != "" && strata[x.Name] })
+		if !asked[b.Name] {
+			if !shares || more == 0 {
+				continue
+			}
+			more--
+		}
+		slices.SortStableFunc(b.Results, func(a, b profile.Result) int { return cmp.Compare(a.Depth.Value, b.Depth.Value) })
+		out.Boreholes = append(out.Boreholes, b)
+		asked[b.Name] = true
+	}
+	for _, k := range s.Curves {
+		if asked[k.Borehole] {
+			out.Curves = append(out.Curves, k)
+		}
 	}
 	return out
 }

@@ -18,7 +18,7 @@ var boreholeRules = []Rule{
 		check:  waterLevels,
 	},
 	{
-		ID: "stratum-unit-weight", Name: "unit weight of the stratum against measured densities", Formula: "γ of the strata table against the median γ of its results, else against w and Gs",
+		ID: "layer-unit-weight", Name: "unit weight of the stratum against measured densities", Formula: "γ of the strata table against the median γ of its results, else against w and Gs",
 		Tolerance: "3 standard deviations (about 9 %), a conflict from 16 %", Source: "the same ground weighed twice", Mark: project, Severity: Error,
 		Causes: []string{"density in Mg/m³ or lb/ft³", "submerged or dry unit weight in place of bulk", "a default value left in the table"},
 		Action: "Correct the strata table: every effective stress below rests on it.",

@@ -3,6 +3,7 @@ package review
 import (
 	"fmt"
 	"math"
+	"slices"
 	"sort"
 	"strings"
 
@@ -47,15 +48,24 @@ func orWord(s, other string) string {
 type answer struct {
 	decision *profile.Decision
 	row      *row // nil where it is about a borehole
+	stratum  bool // it is about a stratum
 	stale    bool
 	now      string // the value as it is today, where stale
 }
 
-// placeQuantities are what a finding can be about besides the quantities of a
-// result; the first few are of a specimen, the others of a borehole.
+// Further quantities that a finding, and so a decision, can be about besides
+// those of a result: of a specimen, and of a borehole.
 var specimenQuantities = []string{"specimen", "depth", "oedometer test", "water content (oedometer)", "specific gravity (oedometer)", "initial void ratio (oedometer)"}
 
-var boreholeQuantities = []string{"water table depth", "pore pressure", "unit weight of the stratum", "description", "number of tests", "laboratory", "stress history"}
+var boreholeQuantities = []string{"water table depth", "pore pressure", "unit weight of the stratum", "description", "number of tests"}
+
+// FurtherQuantities lists what findings can be about besides the quantities of a
+// result, so that decisions on them can be read and completed.
+func FurtherQuantities() []string { return slices.Concat(specimenQuantities, boreholeQuantities) }
+
+// ratios are quantities that a value can be adopted for and that follow from
+// those of a result.
+var ratios = []string{"OCR", "POP", "compression ratio", "recompression ratio", "strength ratio"}
 
 // answer matches every decision with the tables and with the findings.
 func (c *context) answer(found Findings) DecisionProblems {
@@ -81,7 +91,7 @@ func (c *context) answer(found Findings) DecisionProblems {
 // about tells whether a decision answers a finding.
 func (a *answer) about(f *Finding) bool {
 	d := a.decision
-	if !strings.EqualFold(d.Quantity, f.Quantity) {
+	if a.stratum || !strings.EqualFold(d.Quantity, f.Quantity) {
 		return false
 	}
 	for _, p := range f.places() {
@@ -110,8 +120,12 @@ func (c *context) match(d *profile.Decision) (answer, *DecisionProblem) {
 		}
 		return a, nil
 	}
+	if c.ofStratum(d) {
+		a.stratum = true // a design value, which the review does not judge
+		return a, nil
+	}
 	v, known := variableOf(d.Quantity)
-	if !known && !contains(specimenQuantities, d.Quantity) && !isQuantity(d.Quantity) && !contains(boreholeQuantities, d.Quantity) {
+	if !known && !contains(specimenQuantities, d.Quantity) && !isQuantity(d.Quantity) && !contains(boreholeQuantities, d.Quantity) && !contains(ratios, d.Quantity) {
 		return fail(fmt.Sprintf("%q is not a quantity that is reviewed", d.Quantity), "the quantity as a finding or the results table names it, e.g. preconsolidation stress")
 	}
 	var here *row
@@ -136,6 +150,19 @@ func (c *context) match(d *profile.Decision) (answer, *DecisionProblem) {
 		}
 	}
 	return a, nil
+}
+
+// ofStratum tells whether a decision is for a whole stratum, which its borehole
+// or specimen column then names.
+func (c *context) ofStratum(d *profile.Decision) bool {
+	for i := range c.site.Boreholes {
+		for j := range c.site.Boreholes[i].Strata {
+			if name := c.site.Boreholes[i].Strata[j].Name; name != "" && (strings.EqualFold(name, d.Borehole) || strings.EqualFold(name, d.Specimen)) {
+				return true
+			}
+		}
+	}
+	return false
 }
 
 // measured tells whether the tables give a variable at all, as a bound or not.

@@ -2,6 +2,7 @@ package review
 
 import (
 	"cmp"
+	"math"
 	"slices"
 	"strings"
 
@@ -137,6 +138,13 @@ func (f Findings) identify() {
 	seen := map[string]int{}
 	for i := range f {
 		x := &f[i]
+		x.Depth = sane(x.Depth)
+		if x.Suggested != nil {
+			x.Suggested.Value = sane(x.Suggested.Value)
+		}
+		for j := range x.Also {
+			x.Also[j].Depth = sane(x.Also[j].Depth)
+		}
 		parts := []string{x.Rule}
 		for _, p := range []string{x.Borehole, depthText(x.Depth), x.Specimen, x.Stratum, x.Quantity} {
 			if p != "" {
@@ -150,6 +158,14 @@ func (f Findings) identify() {
 		}
 		x.ID = id
 	}
+}
+
+// sane returns a number, not known where it is none: what is printed must be one.
+func sane(n profile.Number) profile.Number {
+	if math.IsNaN(n.Value) || math.IsInf(n.Value, 0) {
+		return profile.Number{}
+	}
+	return n
 }
 
 // slug writes text for an identifier: lower case, other than letters, digits and

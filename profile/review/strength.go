@@ -8,7 +8,7 @@ import (
 var strengthRules = []Rule{
 	{
 		ID: "strength-ratio", Name: "undrained strength against preconsolidation stress", Formula: "su/σ′p by type of test: vane 0.13 to 0.40, triaxial 0.15 to 0.45, simple shear 0.16 to 0.30",
-		Tolerance: "0.25 of the logarithm for doubt, 0.65 for a conflict", Source: "su = 0.22 σ′p mobilized (Mesri 1975), vane ratios after Bjerrum 1973, simple shear 0.23 ± 0.04 (Jamiolkowski et al. 1985)", Mark: memory, Severity: Conflict,
+		Tolerance: "0.25 of the logarithm for doubt, 0.65 for a conflict", Source: "su = 0.22 σ′p mobilized (Mesri 1975), vane ratios after Bjerrum 1973, simple shear 0.23 ± 0.04 (Jamiolkowski et al. 1985)", Mark: memory, Severity: Error,
 		Causes: []string{"σ′p low, or strength low, from disturbance", "fissures", "another unit, or sensitivity and strength exchanged", "strength and σ′p of different depths"},
 		Action: "Compare with the strengths and stresses of the neighbouring depths.",
 		relation: relate(relation{

@@ -11,7 +11,7 @@ var stressRules = []Rule{
 	{
 		ID: "stress-history", Name: "preconsolidation stress against the rest of the ground", Formula: "ln(σ′p/σ′p expected)/s, expected from everything else in the borehole and its neighbours",
 		Tolerance: "2.4 standard deviations are doubted, 3.1 a conflict; s is at least 0.13 (factors of about 1.37 and 1.5)",
-		Source:    "leave-one-out prediction of the stress history; scatter of good tests 0.10 to 0.15", Mark: practice, Severity: Conflict,
+		Source:    "leave-one-out prediction of the stress history; scatter of good tests 0.10 to 0.15", Mark: practice, Severity: Error,
 		Causes: []string{"disturbed specimen, or a test that stopped short (low)", "another unit or a decimal slip", "specimen of another depth or borehole", "a boundary or crust that the log does not show (high)"},
 		Action: "Look at the curve and at the sample record before using it; do not correct it by calculation.",
 		relation: relate(relation{
@@ -80,7 +80,7 @@ var stressRules = []Rule{
 	},
 	{
 		ID: "yield-of-curve", Name: "preconsolidation stress against its curve", Formula: "σ′p of the laboratory against σ′p read from the curve", Tolerance: "a factor of 1.45; 1.9 is a conflict",
-		Source: "spread of constructions on one curve", Mark: project, Severity: Conflict,
+		Source: "spread of constructions on one curve", Mark: project, Severity: Error,
 		Causes: []string{"another unit or digits exchanged", "value and curve of different specimens", "read by eye from a rounded curve"},
 		Action: "Read the curve again; take the reading whose construction you can show.",
 		relation: relate(relation{
