@@ -15,9 +15,10 @@ import (
 // with a large drawing have an A3 page to themselves; the foot of every page has
 // the document number and the page number.
 //
-// Each drawing goes in as SVG, which word processors of 2016 and later show.
-// picture gives a PNG of it for the older ones; where picture is nil, or gives
-// none, a plate with a sentence that says so stands in.
+// Each drawing goes in as SVG, which word processors of 2016 and later show, with
+// a copy for the others: a PNG where picture gives one, else a metafile with the
+// same strokes and text, else a plate with a sentence that says what is missing.
+// picture may be nil.
 //
 // The file carries no date and no author: the same document gives the same bytes.
 // All text is text, whatever it holds; what XML does not allow is replaced.

@@ -20,31 +20,35 @@ const emuPerMillimetre = 36000
 func (x *docx) figure(f Figure, s Section, paper docxPaper) error {
 	wide, high, words := svgSize(f.SVG)
 	scale := math.Min(1, math.Min(paper.pictureWidth/wide, paper.pictureSpace/high))
-	var data []byte
-	if x.picture != nil {
-		p, err := x.picture(f)
-		if err != nil {
-			return fmt.Errorf("picture of %s: %w", f.ID, err)
-		}
-		data = p
-	}
-	if data == nil {
-		plate, err := plateOf(wide, high)
-		if err != nil {
-			return fmt.Errorf("picture of %s: %w", f.ID, err)
-		}
-		data = plate
+	data, kind, err := x.fallback(f, wide, high)
+	if err != nil {
+		return fmt.Errorf("picture of %s: %w", f.ID, err)
 	}
 	x.figures++
 	name := "picture" + strconv.Itoa(x.figures)
-	x.media = append(x.media, docxPart{"word/media/" + name + ".png", data}, docxPart{"word/media/" + name + ".svg", f.SVG})
+	x.media = append(x.media, docxPart{"word/media/" + name + "." + kind, data}, docxPart{"word/media/" + name + ".svg", f.SVG})
 	cx, cy := int(wide*scale*emuPerMillimetre), int(high*scale*emuPerMillimetre)
-	fmt.Fprintf(&x.body, `<w:p><w:pPr><w:pStyle w:val="Figure"/></w:pPr><w:r><w:drawing><wp:inline distT="0" distB="0" distL="0" distR="0"><wp:extent cx="%d" cy="%d"/><wp:docPr id="%d" name="%s" descr="%s"/><wp:cNvGraphicFramePr><a:graphicFrameLocks noChangeAspect="1"/></wp:cNvGraphicFramePr><a:graphic><a:graphicData uri="http://schemas.openxmlformats.org/drawingml/2006/picture"><pic:pic><pic:nvPicPr><pic:cNvPr id="%d" name="%s"/><pic:cNvPicPr/></pic:nvPicPr><pic:blipFill><a:blip r:embed="%s-png"><a:extLst><a:ext uri="{96DAC541-7B7A-43D3-8B79-37D633B846F1}"><asvg:svgBlip r:embed="%s-svg"/></a:ext></a:extLst></a:blip><a:stretch><a:fillRect/></a:stretch></pic:blipFill><pic:spPr><a:xfrm><a:off x="0" y="0"/><a:ext cx="%d" cy="%d"/></a:xfrm><a:prstGeom prst="rect"><a:avLst/></a:prstGeom></pic:spPr></pic:pic></a:graphicData></a:graphic></wp:inline></w:drawing></w:r></w:p>`,
-		cx, cy, x.figures, name, xmlText(join(". ", f.Caption, words)), x.figures, name, name, name, cx, cy)
+	fmt.Fprintf(&x.body, `<w:p><w:pPr><w:pStyle w:val="Figure"/></w:pPr><w:r><w:drawing><wp:inline distT="0" distB="0" distL="0" distR="0"><wp:extent cx="%d" cy="%d"/><wp:docPr id="%d" name="%s" descr="%s"/><wp:cNvGraphicFramePr><a:graphicFrameLocks noChangeAspect="1"/></wp:cNvGraphicFramePr><a:graphic><a:graphicData uri="http://schemas.openxmlformats.org/drawingml/2006/picture"><pic:pic><pic:nvPicPr><pic:cNvPr id="%d" name="%s"/><pic:cNvPicPr/></pic:nvPicPr><pic:blipFill><a:blip r:embed="%s-%s"><a:extLst><a:ext uri="{96DAC541-7B7A-43D3-8B79-37D633B846F1}"><asvg:svgBlip r:embed="%s-svg"/></a:ext></a:extLst></a:blip><a:stretch><a:fillRect/></a:stretch></pic:blipFill><pic:spPr><a:xfrm><a:off x="0" y="0"/><a:ext cx="%d" cy="%d"/></a:xfrm><a:prstGeom prst="rect"><a:avLst/></a:prstGeom></pic:spPr></pic:pic></a:graphicData></a:graphic></wp:inline></w:drawing></w:r></w:p>`,
+		cx, cy, x.figures, name, xmlText(join(". ", f.Caption, words)), x.figures, name, name, kind, name, cx, cy)
 	if f.Caption != s.Title {
 		x.paragraph("FigureCaption", f.Caption)
 	}
 	return nil
+}
+
+// fallback returns what a program that does not show SVG shows: the picture that
+// the caller gives, else a metafile, else a plate that says what is missing.
+func (x *docx) fallback(f Figure, wide, high float64) (data []byte, kind string, err error) {
+	if x.picture != nil {
+		if data, err = x.picture(f); err != nil || data != nil {
+			return data, "png", err
+		}
+	}
+	if data, err = metafileOf(f.SVG); err == nil {
+		return data, "emf", nil
+	}
+	data, err = plateOf(wide, high)
+	return data, "png", err
 }
 
 // svgSize returns the size of a drawing in mm and its description. A drawing
