@@ -119,14 +119,24 @@ func TestEveryNumberIsExplained(t *testing.T) {
 	}
 }
 
-// TestExplainedArithmeticHolds redoes every step of the demo's first borehole.
+// TestExplainedArithmeticHolds redoes every step of the demo at every depth of its profile.
 func TestExplainedArithmeticHolds(t *testing.T) {
 	p := demo(t)
 	// Terms are rounded as printed: the last digit may be off by two.
 	const lastDigits = 2.5
 	redone := 0
-	for _, point := range p.Boreholes[0].Points {
-		e, err := profile.Explain(p, p.Boreholes[0].Borehole, point.Depth)
+	type place struct {
+		borehole string
+		depth    float64
+	}
+	var places []place
+	for i := range p.Boreholes {
+		for _, point := range p.Boreholes[i].Points {
+			places = append(places, place{p.Boreholes[i].Borehole, point.Depth})
+		}
+	}
+	for _, point := range places {
+		e, err := profile.Explain(p, point.borehole, point.depth)
 		if err != nil {
 			t.Fatal(err)
 		}
@@ -137,9 +147,9 @@ func TestExplainedArithmeticHolds(t *testing.T) {
 			redone++
 			got, err := profile.Arithmetic(s.Numbers)
 			if err != nil {
-				t.Errorf("%g m, %s: %v", point.Depth, s.Name, err)
+				t.Errorf("%s, %g m, %s: %v", point.borehole, point.depth, s.Name, err)
 			} else if math.Abs(got-s.Value.Value) > math.Max(lastDigits*math.Pow(10, -float64(s.Decimals)), 1e-5*math.Abs(s.Value.Value)) {
-				t.Errorf("%g m, %s: %s gives %g, printed %s", point.Depth, s.Name, s.Numbers, got, s.Printed())
+				t.Errorf("%s, %g m, %s: %s gives %g, printed %s", point.borehole, point.depth, s.Name, s.Numbers, got, s.Printed())
 			}
 		}
 	}
