@@ -3,6 +3,7 @@ package profile
 import (
 	"fmt"
 	"math"
+	"slices"
 	"strings"
 
 	"pastload/correlate"
@@ -95,6 +96,9 @@ func (x *explainer) index(d *DerivedResult) {
 		}
 		x.add(Step{Key: "liquidity_index", Name: "liquidity index LI", Formula: "(w − PL)/PI", Numbers: fmt.Sprintf("(%s − %s) / %s", value(r.WaterContent), value(pl), value(pi)), Value: li, Decimals: ratioDecimals, Mark: markDefinition})
 	}
+	if e := r.VoidRatioOf(); d.MeasuredCR.Known && e.Known {
+		x.add(Step{Key: "measured_compression_ratio", Name: "compression ratio CR", Formula: "Cc/(1 + e0)", Numbers: fmt.Sprintf("%s / (1 + %s)", value(d.MeasuredCc), value(e)), Value: d.MeasuredCR, Decimals: ratioDecimals, Mark: markDefinition})
+	}
 	w, gs := r.WaterContent, r.SpecificGravity
 	if !w.Known || !gs.Known {
 		return
@@ -108,8 +112,8 @@ func (x *explainer) index(d *DerivedResult) {
 	}
 }
 
-// correlations adds every correlation that was used at a result, and the band
-// that those for Cc make.
+// correlations adds every correlation that was used at a result, and the bands
+// that those for Cc, CR and Cr make.
 func (x *explainer) correlations(d *DerivedResult) {
 	told := map[string]bool{} // derived inputs that have their step
 	for _, c := range d.Correlations {
@@ -117,7 +121,7 @@ func (x *explainer) correlations(d *DerivedResult) {
 		if !ok {
 			continue
 		}
-		v := x.inputs(d, entry)
+		v := x.inputs(d, entry.Quantity)
 		e, err := entry.Evaluate(v)
 		if err != nil {
 			continue
@@ -147,7 +151,9 @@ func (x *explainer) correlations(d *DerivedResult) {
 			x.add(Step{Name: "σ′p from it", Formula: "OCR·σ′v0", Numbers: term(e.Value, ratioDecimals) + " × " + term(d.Effective.Value, stressDecimals), Value: Known(e.Value * d.Effective.Value), Decimals: 1, Unit: "kPa", Mark: markDefinition})
 		}
 	}
-	x.band(d)
+	for _, b := range bands {
+		x.band(d, b)
+	}
 }
 
 func quantityDecimals(q correlate.Quantity) int {
@@ -158,9 +164,9 @@ func quantityDecimals(q correlate.Quantity) int {
 }
 
 // inputs gathers what a correlation was given, as the profile gave it.
-func (x *explainer) inputs(d *DerivedResult, c correlate.Correlation) correlate.Values {
+func (x *explainer) inputs(d *DerivedResult, q correlate.Quantity) correlate.Values {
 	v := d.Result.values(d.Effective)
-	if c.Quantity != correlate.CompressionIndex {
+	if !slices.ContainsFunc(bands, func(b bandOf) bool { return b.quantity == q }) {
 		return v
 	}
 	if s := x.borehole.StratumAt(d.Depth, d.Result.Stratum); s != nil && isOrganic(s) {
@@ -178,16 +184,29 @@ func inputList(used []correlate.Used) string {
 	return strings.Join(terms, ", ")
 }
 
-// band adds how the correlations for Cc are put together.
-func (x *explainer) band(d *DerivedResult) {
-	if !d.CorrelatedCc.Known {
+// A bandOf is a quantity that correlations give as a band.
+type bandOf struct {
+	quantity correlate.Quantity
+	key      string
+	of       func(*DerivedResult) Range
+}
+
+var bands = []bandOf{
+	{correlate.CompressionIndex, "correlated_compression_index", func(d *DerivedResult) Range { return d.CorrelatedCc }},
+	{correlate.CompressionRatio, "correlated_compression_ratio", func(d *DerivedResult) Range { return d.CorrelatedCR }},
+	{correlate.RecompressionIndex, "correlated_recompression_index", func(d *DerivedResult) Range { return d.CorrelatedCr }},
+}
+
+// band adds how the correlations for a quantity are put together.
+func (x *explainer) band(d *DerivedResult, b bandOf) {
+	if !b.of(d).Known {
 		return
 	}
-	v := x.inputs(d, correlate.Correlation{Quantity: correlate.CompressionIndex})
-	band, err := correlate.BandOf(correlate.CompressionIndex, v, x.site.Settings.correlationsFor(correlate.CompressionIndex))
+	band, err := correlate.BandOf(b.quantity, x.inputs(d, b.quantity), x.site.Settings.correlationsFor(b.quantity))
 	if err != nil {
 		return
 	}
+	symbol := b.quantity.Symbol()
 	var logs, scatters, spreads []string
 	mean := math.Log(band.Best)
 	for _, m := range band.Members {
@@ -200,11 +219,11 @@ func (x *explainer) band(d *DerivedResult) {
 		spreads = append(spreads, "("+sum("ln("+plain(m.Estimate.Value, 6)+")", minus(mean, 6))+")^2")
 	}
 	n := len(logs)
-	x.add(Step{Key: "correlated_compression_index", Name: "Cc, best of the correlations", Formula: "mean of ln Cc over the families", Numbers: fmt.Sprintf("exp((%s) / %d)", sum(logs...), n), Value: Known(band.Best), Decimals: ratioDecimals})
-	x.add(Step{Name: "standard deviation of ln Cc", Formula: "√(mean scatter² + variance of ln Cc)", Numbers: fmt.Sprintf("√((%s) / %d + (%s) / %d)", sum(scatters...), n, sum(spreads...), n), Value: Known(band.LnSD), Decimals: ratioDecimals})
+	x.add(Step{Key: b.key, Name: symbol + ", best of the correlations", Formula: "mean of ln " + symbol + " over the families", Numbers: fmt.Sprintf("exp((%s) / %d)", sum(logs...), n), Value: Known(band.Best), Decimals: ratioDecimals})
+	x.add(Step{Name: "standard deviation of ln " + symbol, Formula: "√(mean scatter² + variance of ln " + symbol + ")", Numbers: fmt.Sprintf("√((%s) / %d + (%s) / %d)", sum(scatters...), n, sum(spreads...), n), Value: Known(band.LnSD), Decimals: ratioDecimals})
 	low := fmt.Sprintf("%s × exp(−1.644854 × %s)", plain(band.Best, 6), plain(band.LnSD, 6))
-	x.add(Step{Key: "correlated_compression_index_low", Name: "Cc low of the correlations, 5 % point", Numbers: low, Value: Known(band.Low), Decimals: ratioDecimals})
-	x.add(Step{Key: "correlated_compression_index_high", Name: "Cc high of the correlations, 95 % point", Numbers: strings.Replace(low, "−1.644854", "1.644854", 1), Value: Known(band.High), Decimals: ratioDecimals})
+	x.add(Step{Key: b.key + "_low", Name: symbol + " low of the correlations, 5 % point", Numbers: low, Value: Known(band.Low), Decimals: ratioDecimals})
+	x.add(Step{Key: b.key + "_high", Name: symbol + " high of the correlations, 95 % point", Numbers: strings.Replace(low, "−1.644854", "1.644854", 1), Value: Known(band.High), Decimals: ratioDecimals})
 }
 
 // listed joins places, cutting long lists.

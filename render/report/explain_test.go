@@ -46,8 +46,8 @@ func printedAlike(e profile.Explanation, at stepKeys, c Column, cell Cell) bool 
 	return false
 }
 
-// TestEveryNumberIsExplained finds every number of the profile table and of the
-// tests table of one borehole again in the explanation of its depth.
+// TestEveryNumberIsExplained finds every number of the profile table, of the
+// tests table and of that of compressibility of one borehole again in the explanation of its depth.
 func TestEveryNumberIsExplained(t *testing.T) {
 	p := demo(t)
 	b := p.Boreholes[0]
@@ -74,6 +74,11 @@ func TestEveryNumberIsExplained(t *testing.T) {
 			"correlated_k0_low":                  {"Strength and horizontal", "correlated_k0_low"},
 			"correlated_k0_high":                 {"Strength and horizontal", "correlated_k0_high"},
 		},
+		"compression": {
+			"measured_compression_index": {"Measured", "compression_index"}, "correlated_low": {"Correlations", "correlated_compression_index_low"}, "correlated": {"Correlations", "correlated_compression_index"}, "correlated_high": {"Correlations", "correlated_compression_index_high"},
+			"measured_compression_ratio": {"Index", "measured_compression_ratio"}, "correlated_ratio_low": {"Correlations", "correlated_compression_ratio_low"}, "correlated_ratio": {"Correlations", "correlated_compression_ratio"}, "correlated_ratio_high": {"Correlations", "correlated_compression_ratio_high"},
+			"measured_recompression_index": {"Measured", "recompression_index"}, "correlated_recompression_low": {"Correlations", "correlated_recompression_index_low"}, "correlated_recompression": {"Correlations", "correlated_recompression_index"}, "correlated_recompression_high": {"Correlations", "correlated_recompression_index_high"},
+		},
 		"tests": {
 			"effective_stress":             {"Preconsolidation test", "effective_stress_kPa"},
 			"preconsolidation_stress":      {"Preconsolidation test", "preconsolidation_stress_kPa"},
@@ -89,7 +94,7 @@ func TestEveryNumberIsExplained(t *testing.T) {
 		},
 	}
 	seen := 0
-	for _, table := range []*Table{Points(b), Tests(b)} {
+	for _, table := range []*Table{Points(b), Tests(b), Compression(b)} {
 		keys := columns[table.Name]
 		for _, row := range table.Rows {
 			e, err := profile.Explain(p, b.Borehole, row[1].Value)
