@@ -71,7 +71,14 @@ func bounded(n Number, b Bound) Number {
 // expected adds what all other evidence says of a test.
 func (x *explainer) expected(t *Test) {
 	if !t.Expected.Known {
-		x.say("expected", "nothing: the test is not used, or no other evidence is", "")
+		why := "no other evidence speaks of this depth"
+		switch {
+		case !t.Used:
+			why = "the test is not used"
+		case t.Bound != Exact:
+			why = "the test is a bound, which a value cannot be held against"
+		}
+		x.say("expected", "nothing: "+why, "")
 		return
 	}
 	e := t.Expected

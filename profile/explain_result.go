@@ -127,11 +127,7 @@ func (x *explainer) correlations(d *DerivedResult) {
 			continue
 		}
 		for _, u := range e.Used {
-			if u.Derived == "" || told[u.Symbol] {
-				continue
-			}
-			told[u.Symbol] = true
-			x.add(Step{Name: u.Name + " " + u.Written + " for the correlations", Formula: u.Derived, Numbers: filled(u.Derived, v, u.Value), Value: Known(u.Value), Decimals: ratioDecimals, Unit: u.Unit})
+			x.derived(u.Symbol, v, told)
 		}
 		args := correlate.Values{}
 		for _, u := range e.Used {
@@ -154,6 +150,32 @@ func (x *explainer) correlations(d *DerivedResult) {
 	for _, b := range bands {
 		x.band(d, b)
 	}
+}
+
+// derived adds how an input follows from what was measured, once, after what it
+// follows from itself.
+func (x *explainer) derived(symbol string, v correlate.Values, told map[string]bool) {
+	value, how, ok := v.Resolve(symbol)
+	if !ok || how == "" || told[symbol] {
+		return
+	}
+	told[symbol] = true
+	args := correlate.Values{}
+	var self correlate.Variable
+	for _, o := range correlate.Variables() {
+		if o.Symbol == symbol {
+			self = o
+			continue
+		}
+		if substitute(how, correlate.Values{o.Symbol: 1}) == how {
+			continue // not in the formula
+		}
+		x.derived(o.Symbol, v, told)
+		if from, _, ok := v.Resolve(o.Symbol); ok {
+			args[o.Symbol] = from
+		}
+	}
+	x.add(Step{Name: self.Name + " " + self.Written + " for the correlations", Formula: how, Numbers: filled(how, args, value), Value: Known(value), Decimals: ratioDecimals, Unit: self.Unit})
 }
 
 func quantityDecimals(q correlate.Quantity) int {

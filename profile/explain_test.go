@@ -240,6 +240,19 @@ func TestEveryCorrelationOfTheProfileIsFilledIn(t *testing.T) {
 	}
 }
 
+// TestDerivedInputsAreExplainedInTurn: w from LI and PL, and PL from LL and PI.
+func TestDerivedInputsAreExplainedInTurn(t *testing.T) {
+	x := &explainer{}
+	x.derived("w", correlate.Values{"LL": 50, "PI": 20, "LI": 1.2}, map[string]bool{})
+	var got []string
+	for _, s := range x.steps {
+		got = append(got, s.Formula+" = "+s.Numbers)
+	}
+	if want := []string{"LL − PI = 50 − 20", "PL + LI·PI = 30 + 1.2·20"}; fmt.Sprint(got) != fmt.Sprint(want) {
+		t.Errorf("got %q, want %q", got, want)
+	}
+}
+
 func TestFilledNeverPrintsWrongArithmetic(t *testing.T) {
 	args := correlate.Values{"PI": 30}
 	if got := filled("Cc = 2.303·λ, λ = 0.02 + 0.0045·PI", args, 0.357); got != "" {
