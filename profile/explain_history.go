@@ -44,6 +44,12 @@ func (x *explainer) evidence(p *Point) {
 		words := fmt.Sprintf("grade %s; standard deviation of ln σ′p %s", t.Grade, plain(e.LnSD, 3))
 		x.add(Step{Name: "test at " + at(t.Depth, t.Specimen), Value: Number{Value: t.Preconsolidation.Best, Known: true, Bound: t.Bound}, Decimals: 1, Unit: "kPa", Words: words})
 	}
+	for i := range x.site.Past {
+		e := &x.site.Past[i]
+		if e.Size.Known && (e.Borehole == "" || e.Borehole == x.borehole.Name) && (e.Stratum == "" || e.Stratum == p.Stratum) {
+			x.add(Step{Name: "known of the past: " + e.Kind, Value: e.Size, Decimals: decimalsOf(e.Size), Unit: pastUnit(e.Kind), Words: e.Reported, Source: cited(e.Size)})
+		}
+	}
 	n := 0
 	for _, t := range x.ground.neighbours(x.profile) {
 		if t.Layer == p.stratum {
@@ -75,6 +81,14 @@ func (x *explainer) evidence(p *Point) {
 			x.say("cone sounding", count(n, "layer")+" of this stratum", "")
 		}
 	}
+}
+
+// pastUnit is the unit of the size of something past.
+func pastUnit(kind string) string {
+	if kind == "former load" {
+		return "kPa"
+	}
+	return "m"
 }
 
 // cone adds the layer of the cone sounding at the depth and what it gives.
