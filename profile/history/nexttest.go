@@ -4,7 +4,7 @@ import "math"
 
 // nextStations is how many depths of a layer are thought of for one more test,
 // and how many the band is averaged over.
-const nextStations = 30
+const nextStations = 20
 
 // enough is the share of the posterior that the choice of the next test rests on.
 const enough = 0.98

@@ -139,8 +139,10 @@ func (m *model) fit(r *rows, sv solved) underSetting {
 			}
 		}
 		sum := sumWild(sets, r.tests)
+		least := sum.logAll + math.Log(smallestPair)
 		for x := r.tests + 1; x < len(sets); x++ {
-			if s := &sets[x]; s.log+math.Log(s.factor) > sum.logAll+math.Log(smallestPair) {
+			// The factor of a pair is below one: its logarithm is taken of few.
+			if s := &sets[x]; s.log > least && s.log+math.Log(s.factor) > least {
 				for i := range r.tests {
 					if s.first != i && s.second != i {
 						mean, variance, log, factor := c.without(r.tests, s, i, r.value[i])

@@ -5,13 +5,20 @@ import (
 	"sort"
 )
 
-// moments are those of ln σ′p at a depth in one mechanism under one setting.
+// moments are those of ln σ′p at a depth.
 type moments struct{ weight, mean, square float64 }
+
+// A group is a mechanism under a setting: the moments at each depth, and the
+// weighted sum of what the wild sets add around the mean of the tests.
+type group struct {
+	at     []moments
+	around []float64
+}
 
 // predict returns the distribution of ln σ′p at depths whose lines follow
 // those of the rows.
 func (p *posterior) predict(depths []float64) []mixture {
-	groups := make([][]moments, len(p.settings)*len(p.model.mechanisms)) // nil where empty
+	groups := make([]group, len(p.settings)*len(p.model.mechanisms)) // at is nil where empty
 	sideBySide(len(p.settings), func(s int) {
 		u := &p.settings[s]
 		if len(u.nodes) == 0 {
@@ -20,18 +27,25 @@ func (p *posterior) predict(depths []float64) []mixture {
 		gain, left := p.gain(u, depths)
 		for i := range u.nodes {
 			g := &groups[s*len(p.model.mechanisms)+p.model.nodes[u.nodes[i].node].mechanism]
-			if *g == nil {
-				*g = make([]moments, len(depths))
+			if g.at == nil {
+				*g = group{make([]moments, len(depths)), make([]float64, p.rows.tests*p.rows.tests)}
 			}
-			p.spread(&u.nodes[i], gain, left, *g)
+			p.spread(&u.nodes[i], gain, left, g)
+		}
+		for k := range p.model.mechanisms {
+			g := &groups[s*len(p.model.mechanisms)+k]
+			for j := range g.at {
+				g.at[j].square += quadratic(gain[j][:p.rows.tests], g.around)
+			}
 		}
 	})
 	out := make([]mixture, len(depths))
 	for j := range depths {
 		for _, g := range groups {
-			if g != nil && g[j].weight > 0 {
-				mean := g[j].mean / g[j].weight
-				out[j].add(g[j].weight, mean, math.Sqrt(math.Max(g[j].square/g[j].weight-mean*mean, 1e-10)))
+			if g.at != nil && g.at[j].weight > 0 {
+				m := g.at[j]
+				mean := m.mean / m.weight
+				out[j].add(m.weight, mean, math.Sqrt(math.Max(m.square/m.weight-mean*mean, 1e-10)))
 			}
 		}
 		out[j].trim(smallestGroup)
@@ -60,32 +74,60 @@ func (p *posterior) gain(u *underSetting, depths []float64) (gain [][]float64, l
 	return gain, left
 }
 
-// spread adds a node's moments at each depth.
-func (p *posterior) spread(f *fitted, gain [][]float64, left []float64, out []moments) {
+// spread adds a node's moments at each depth. With g the gain of the rows on
+// the departure and rest the slopes that they do not follow, a test acts by
+// full = g + (PJ)·inner·rest. The wild sets take full·shift from the mean and
+// add fullᵀ·Q·full to the variance, Q = more − shift·shiftᵀ. Of that, gᵀQg is
+// the same form for all nodes of a group and is summed once: see around.
+func (p *posterior) spread(f *fitted, gain [][]float64, left []float64, out *group) {
 	ln := &p.model.lines[f.node]
 	n, t, d := len(p.rows.depth), p.rows.tests, len(f.step)
-	rest := make([]float64, d) // how the parameters act where the rows do not follow
-	turned := make([]float64, d)
-	full := make([]float64, t)
-	for j := range gain {
-		g := gain[j]
-		mean := ln.mean[n+j] + dot(g, f.residual)
+	residual := append([]float64(nil), f.residual...)
+	q := make([]float64, t*t)
+	for i := range t {
+		residual[i] -= f.shift[i]
+		for j := range t {
+			q[i*t+j] = f.more[i*t+j] - f.shift[i]*f.shift[j]
+			out.around[i*t+j] += f.weight * q[i*t+j]
+		}
+	}
+	// The same by parameter: slopes of a test's action, what Q makes of them,
+	// and the step less what the wild sets take.
+	act := make([][]float64, d)
+	turned := make([][]float64, d)
+	step := append([]float64(nil), f.step...)
+	for a := range d {
+		act[a], turned[a] = make([]float64, t), make([]float64, t)
+		for i := range t {
+			act[a][i] = dot(f.inner[a*d:a*d+d], f.pj[i*d:i*d+d])
+		}
+		for i := range t {
+			turned[a][i] = 2 * dot(q[i*t:i*t+t], act[a])
+		}
+		step[a] -= dot(act[a], f.shift)
+	}
+	inner := append([]float64(nil), f.inner...)
+	for a := range d {
+		for b := range d {
+			inner[a*d+b] += 0.5 * dot(act[a], turned[b])
+		}
+	}
+	rest := make([]float64, d)
+	for j, g := range gain {
+		mean := ln.mean[n+j] + dot(residual, g)
 		variance := left[j]
 		for a := range d {
-			rest[a] = ln.slope[a][n+j] - dot(g, ln.slope[a][:n])
-			mean += rest[a] * f.step[a]
+			rest[a] = ln.slope[a][n+j] - dot(g, ln.slope[a])
+			mean += rest[a] * step[a]
+			variance += rest[a] * dot(turned[a], g)
 		}
 		for a := range d {
-			turned[a] = dot(f.inner[a*d:a*d+d], rest)
-			variance += rest[a] * turned[a]
+			variance += rest[a] * dot(inner[a*d:a*d+d], rest)
 		}
-		for i := range full {
-			full[i] = g[i] + dot(turned, f.pj[i*d:i*d+d])
-		}
-		shift := dot(full, f.shift)
-		out[j].weight += f.weight
-		out[j].mean += f.weight * (mean - shift)
-		out[j].square += f.weight * (variance + mean*mean - 2*mean*shift + quadratic(full, f.more))
+		m := &out.at[j]
+		m.weight += f.weight
+		m.mean += f.weight * mean
+		m.square += f.weight * (variance + mean*mean)
 	}
 }
 

@@ -76,7 +76,7 @@ type wildSum struct {
 }
 
 // negligible is the log ratio below which a term is not added to a sum.
-const negligible = -30.0
+const negligible = -23.0
 
 // highest returns the largest log of the sets.
 func highest(sets []wildSet) float64 {
