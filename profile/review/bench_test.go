@@ -20,6 +20,8 @@ func thousand(b *testing.B, faults bool) *profile.Profile {
 		}
 		for i := range s.Boreholes {
 			x := &s.Boreholes[i]
+			// One level of ground water, as under one site.
+			x.GroundLevel = profile.Known(x.WaterTableDepth.Value)
 			x.Name = fmt.Sprintf("%s of %d", x.Name, seed)
 			for j := range x.Strata {
 				x.Strata[j].Name += fmt.Sprint(" ", seed)

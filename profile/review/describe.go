@@ -13,8 +13,13 @@ import (
 // named as the cause.
 const enoughGain = 1.0
 
-// strongGain is the gain at which several doubts with one cause are a conflict.
-const strongGain = 8.0
+// strongGain is the gain at which several doubts with one cause are a conflict;
+// namedGain is enough where the cause is a slip with a name.
+const strongGain, namedGain = 8.0, 5.0
+
+// belowOne is how far, in standard deviations, OCR must be below one to make a
+// conflict of a σ′p that the rest of the ground already doubts.
+const belowOne = 0.8
 
 // rowFindings finds the causes of what does not agree on a row: one change at a
 // time, the likeliest first, until nothing is left or no change helps.
@@ -64,7 +69,8 @@ func (c *context) describe(r *row, rd *reading, hs []change, restored []int) Fin
 	rule := c.ruleOf[main]
 	f := r.finding(rule, h.v)
 	f.Severity = c.relations[main].severity(rd.c[main].z)
-	if len(restored) > 1 && h.gain >= strongGain && f.Severity.Rank() < Conflict.Rank() {
+	strong := len(restored) > 1 && (h.gain >= strongGain || h.gain >= namedGain && h.slip.how != "")
+	if f.Severity == Doubt && (strong || h.v == preconsolidation && c.belowOne(rd)) {
 		f.Severity = Conflict
 	}
 	f.Found = r.shown(h.v)
@@ -89,6 +95,23 @@ func (c *context) describe(r *row, rd *reading, hs []change, restored []int) Fin
 		f.Message += " " + capital(other.inWords(r)) + " would do nearly as well."
 	}
 	return f
+}
+
+// belowOne tells whether OCR is below one on a row whose σ′p the history doubts.
+func (c *context) belowOne(rd *reading) bool {
+	doubted, below := false, false
+	for i, rule := range c.ruleOf {
+		if !rd.ok[i] {
+			continue
+		}
+		switch rule.ID {
+		case "stress-history":
+			doubted = c.relations[i].severity(rd.c[i].z).Rank() >= Doubt.Rank() && rd.c[i].z < 0
+		case "ocr-below-one":
+			below = rd.c[i].z < -belowOne
+		}
+	}
+	return doubted && below
 }
 
 // suggest adds the change that would restore agreement.

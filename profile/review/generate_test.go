@@ -240,7 +240,7 @@ func (m *maker) curve(borehole string, r *profile.Result, cc, cr, yield float64)
 			loop *= 2
 		}
 	}
-	for s := 12.5; s <= last; s *= 2 {
+	for s := 12.5; s <= last && at(s) > 0.1; s *= 2 {
 		stage("load", s, at(s))
 		if s == loop {
 			for d := s / 2; d >= s/8; d /= 2 {

@@ -2,10 +2,8 @@ package review
 
 import (
 	"cmp"
-	"fmt"
 	"math"
 	"slices"
-	"strings"
 
 	"pastload/profile"
 )
@@ -58,7 +56,6 @@ type move struct {
 	how   string // of the depth, "" where only the stratum is known
 	to    *profile.Stratum
 	gain  float64
-	after int // how many broken checks agree then
 }
 
 // misplaced finds specimens that belong elsewhere. It returns which rows are
@@ -81,7 +78,7 @@ func (c *context) misplaced(found *Findings) map[int]bool {
 			if q.group == r.group && q.borehole == r.borehole {
 				continue // at other depths of one stratum they cannot be told apart
 			}
-			if m, ok := c.exchange(r, q, rd, readings[q.index], single+c.bestSingle(q, readings[q.index])); ok {
+			if m, ok := c.exchange(r, q, rd, readings[q.index], single+c.bestSingle(q, readings[q.index]), len(suspects)); ok {
 				moves = append(moves, m)
 			}
 		}
@@ -106,10 +103,15 @@ func (c *context) misplaced(found *Findings) map[int]bool {
 	return done
 }
 
-// strange tells whether a row disagrees with its place in two different ways.
+// indexVariables are those that belong to the soil whatever was done to the
+// sample: only they can show that a specimen is of another stratum.
+const indexVariables = 1<<unitWeight | 1<<waterContent | 1<<liquidLimit | 1<<plasticLimit | 1<<plasticityIndex | 1<<voidRatio
+
+// strange tells whether a row disagrees with its place in two different ways, one
+// of them by what the soil is.
 func (c *context) strange(r *row, rd *reading) bool {
 	var vars uint64
-	n := 0
+	n, index := 0, false
 	for i, x := range c.relations {
 		if !rd.ok[i] || !x.ofPlace(c.ruleOf[i]) || math.Abs(rd.c[i].z) < 2 {
 			continue
@@ -118,8 +120,9 @@ func (c *context) strange(r *row, rd *reading) bool {
 			n++
 		}
 		vars |= x.needs
+		index = index || x.property > 0 && x.needs&indexVariables != 0
 	}
-	return n >= 2
+	return n >= 2 && index
 }
 
 // ofPlace tells whether a check compares a row with the ground around it.
@@ -150,13 +153,14 @@ func (r *row) at(b *profile.Borehole, ground *profile.BoreholeProfile, depth flo
 }
 
 // exchange tries two specimens at each other's places.
-func (c *context) exchange(r, q *row, rd, qd *reading, single float64) (move, bool) {
+func (c *context) exchange(r, q *row, rd, qd *reading, single float64, suspects int) (move, bool) {
 	x := r.at(q.borehole, q.ground, q.depth.Value, q.stratum, q.group)
 	y := q.at(r.borehole, r.ground, r.depth.Value, r.stratum, r.group)
 	x.partner, x.line, x.effective = q, q.line, q.effective
 	y.partner, y.line, y.effective = r, r.line, r.effective
 	gx, gy := rd.cost-c.after(rd, x, math.MaxUint64), qd.cost-c.after(qd, y, math.MaxUint64)
-	m := move{r: r, q: q, gain: gx + gy - costExchange}
+	// Among many that stand out two will fit each other by chance.
+	m := move{r: r, q: q, gain: gx + gy - costExchange - math.Log(float64(suspects)/2)}
 	return m, gx > 1 && gy > 1 && m.gain > math.Max(enoughPlaceGain, single)
 }
 
@@ -190,143 +194,4 @@ func (c *context) elsewhere(r *row, rd *reading, single float64) (move, bool) {
 		try((s.Top+s.Base)/2, costElsewhere, "")
 	}
 	return best, best.to != nil
-}
-
-func (r *row) typedDepth() string {
-	if s := r.depth.Source; s != nil {
-		if x, ok := plainNumber(strings.TrimSpace(s.Text)); ok && x == r.depth.Value {
-			return strings.TrimSpace(s.Text)
-		}
-	}
-	return fixed(r.depth.Value, 2)
-}
-
-// depthSlips lists depths that may have been meant.
-func depthSlips(text string) []slip {
-	x, ok := plainNumber(text)
-	if !ok {
-		return nil
-	}
-	var out []slip
-	for _, y := range swaps(text) {
-		out = append(out, slip{value: y, how: "two digits exchanged", cost: costDepthSlip})
-	}
-	for _, d := range []float64{10, 20, 30} {
-		out = append(out, slip{value: x + d, how: "the first digit was lost", cost: costDepthSlip})
-	}
-	if x >= 10 {
-		out = append(out, slip{value: math.Mod(x, 10), how: "a digit too many", cost: costDepthSlip})
-	}
-	return append(out, slip{value: x * 10, how: "decimal point one place out", cost: costDepthSlip}, slip{value: x / 10, how: "decimal point one place out", cost: costDepthSlip})
-}
-
-// inOrder tells whether a depth lies between those of the rows before and after
-// it in the table, where that is known.
-func (r *row) inOrder(depth float64) bool {
-	if r.result == nil || r.result.Source == nil {
-		return false
-	}
-	low, high := math.Inf(-1), math.Inf(1)
-	before, after := -1, math.MaxInt
-	for i := range r.borehole.Results {
-		o := &r.borehole.Results[i]
-		if o == r.result || o.Source == nil || o.Source.File != r.result.Source.File {
-			continue
-		}
-		switch line := o.Source.Line; {
-		case line < r.result.Source.Line && line > before:
-			before, low = line, o.Depth.Value
-		case line > r.result.Source.Line && line < after:
-			after, high = line, o.Depth.Value
-		}
-	}
-	return depth >= low && depth <= high
-}
-
-// brokenPlace lists what a row breaks at its place, in words.
-func (c *context) brokenPlace(r *row, rd *reading) []string {
-	var out []string
-	for i, x := range c.relations {
-		if rd.ok[i] && math.Abs(rd.c[i].z) >= 2 {
-			out = append(out, placeName(r.place())+": "+x.say(r, rd.c[i])+".")
-		}
-	}
-	return out
-}
-
-func (c *context) describeExchange(m *move, readings map[int]*reading) Finding {
-	rule := ruleByID("specimen-exchange")
-	f := m.r.finding(rule, waterContent)
-	f.Quantity, f.Severity = "specimen", Conflict
-	f.fix, f.gain = c.correctPlace(m), m.gain
-	f.Found = m.r.name()
-	f.Wanted = m.q.name()
-	f.Message = fmt.Sprintf("%s and %s look exchanged: neither goes with the ground around it, and each goes with the ground around the other.", m.r.name(), m.q.name())
-	f.Evidence = append(c.brokenPlace(m.r, readings[m.r.index]), c.brokenPlace(m.q, readings[m.q.index])...)
-	f.Also = []Place{m.q.place()}
-	f.Cells = cells(m.r, m.q)
-	f.Impact = math.Max(m.r.worstImpact(), m.q.worstImpact())
-	f.Suggested = &Suggestion{Quantity: "specimen", How: "exchange " + m.r.name() + " with " + m.q.name(), Makes: len(f.Evidence)}
-	return f
-}
-
-func (c *context) describeElsewhere(m *move, rd *reading) Finding {
-	r := m.r
-	f := r.finding(ruleByID("specimen-place"), waterContent)
-	f.Quantity, f.Severity = "depth", Conflict
-	f.fix, f.gain = c.correctPlace(m), m.gain
-	f.Found = r.typedDepth() + " m"
-	f.Evidence = c.brokenPlace(r, rd)
-	f.Cells = cells(r)
-	f.Impact = r.worstImpact()
-	name := m.to.Name
-	if name == "" {
-		name = "the stratum"
-	}
-	f.Message = fmt.Sprintf("%s does not look like %s: %s. It looks like %s.", r.name(), r.stratumName(), firstClause(f.Evidence, r), name)
-	if m.how == "" {
-		f.Wanted = fmt.Sprintf("a depth in %s (%s to %s m)", name, fixed(m.to.Top, 2), fixed(m.to.Base, 2))
-		return f
-	}
-	f.Wanted = fixed(m.depth, 2) + " m"
-	f.Message += fmt.Sprintf(" At %s m (%s) it would fit.", fixed(m.depth, 2), m.how)
-	if r.inOrder(m.depth) && !r.inOrder(r.depth.Value) {
-		f.Message += " The order of the table says so too."
-	}
-	f.Causes = putFirst(f.Causes, m.how)
-	f.Suggested = &Suggestion{Quantity: "depth", Value: profile.Known(m.depth), How: m.how, Makes: len(f.Evidence)}
-	return f
-}
-
-// firstClause returns the first piece of evidence without its place.
-func firstClause(evidence []string, r *row) string {
-	if len(evidence) == 0 {
-		return "its numbers differ"
-	}
-	return strings.TrimSuffix(strings.TrimPrefix(evidence[0], r.name()+": "), ".")
-}
-
-// cells returns where rows were read.
-func cells(rows ...*row) []string {
-	var out []string
-	for _, r := range rows {
-		switch {
-		case r.depth.Source != nil:
-			out = append(out, r.depth.Source.String())
-		case r.result != nil && r.result.Source != nil:
-			out = append(out, r.result.Source.String())
-		case r.curve != nil && r.curve.Source != nil:
-			out = append(out, r.curve.Source.String())
-		}
-	}
-	return out
-}
-
-// worstImpact is the impact of leaving a row's numbers where they are.
-func (r *row) worstImpact() float64 {
-	worst := 0.1
-	if r.known(preconsolidation) && r.line.known {
-		worst = math.Max(worst, r.impact(preconsolidation, r.line.best))
-	}
-	return worst
 }

@@ -150,7 +150,7 @@ func family(r *row, v variable) []variable {
 var exchanges = [][2]variable{
 	{liquidLimit, plasticLimit}, {waterContent, liquidLimit}, {waterContent, plasticLimit}, {plasticLimit, plasticityIndex}, {liquidLimit, plasticityIndex},
 	{waterContent, plasticityIndex}, {specificGravity, voidRatio}, {unitWeight, waterContent}, {compressionIndex, recompressionIndex}, {undrainedStrength, preconsolidation},
-	{undrainedStrength, sensitivity}, {compressionIndex, voidRatio}, {clayFraction, plasticityIndex}, {waterContent, clayFraction}, {givenStress, preconsolidation},
+	{undrainedStrength, sensitivity}, {compressionIndex, voidRatio}, {givenStress, preconsolidation},
 }
 
 // inWords says what a change would make of a value.

@@ -10,12 +10,12 @@ import (
 var stressRules = []Rule{
 	{
 		ID: "stress-history", Name: "preconsolidation stress against the rest of the ground", Formula: "ln(σ′p/σ′p expected)/s, expected from everything else in the borehole and its neighbours",
-		Tolerance: "2.4 standard deviations are doubted, 3.1 a conflict; s is at least 0.13 (factors of about 1.37 and 1.5)",
+		Tolerance: "2.4 standard deviations are doubted, 2.9 a conflict, or 2.4 where OCR is below 0.9 besides; s is at least 0.13 (factors of about 1.37 and 1.46)",
 		Source:    "leave-one-out prediction of the stress history; scatter of good tests 0.10 to 0.15", Mark: practice, Severity: Error,
 		Causes: []string{"disturbed specimen, or a test that stopped short (low)", "another unit or a decimal slip", "specimen of another depth or borehole", "a boundary or crust that the log does not show (high)"},
 		Action: "Look at the curve and at the sample record before using it; do not correct it by calculation.",
 		relation: relate(relation{
-			vars: []variable{preconsolidation}, doubt: 2.4, conflict: 3.1, fault: 14,
+			vars: []variable{preconsolidation}, doubt: 2.4, conflict: 2.9, fault: 14,
 			when: func(r *row) bool { return r.line.known },
 			compare: func(r *row) (comparison, bool) {
 				return withinLog(r.v[preconsolidation], r.line.best, r.line.sd)

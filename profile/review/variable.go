@@ -70,8 +70,8 @@ const (
 var traits = [nVariables]trait{
 	unitWeight:           {"unit weight", "γ", " kN/m³", 1, 0.5, 0.2, density, nil},
 	waterContent:         {"water content", "w", " %", 1, 0.3, 0, percentage, nil},
-	liquidLimit:          {"liquid limit", "LL", " %", 0, 0.2, 0.3, percentage, nil},
-	plasticLimit:         {"plastic limit", "PL", " %", 0, 0.1, 0.3, percentage, nil},
+	liquidLimit:          {"liquid limit", "LL", " %", 0, 0.2, 0.8, percentage, nil},
+	plasticLimit:         {"plastic limit", "PL", " %", 0, 0.1, 0.8, percentage, nil},
 	plasticityIndex:      {"plasticity index", "PI", " %", 0, 0.2, 0, percentage, nil},
 	liquidityIndex:       {"liquidity index", "LI", "", 2, 0.1, 0, number, nil},
 	specificGravity:      {"specific gravity", "Gs", "", 2, 0.2, 0.3, gravity, nil},
