@@ -2,6 +2,7 @@ package report
 
 import (
 	"archive/zip"
+	"compress/flate"
 	"fmt"
 	"io"
 	"strconv"
@@ -28,6 +29,15 @@ func (d *Document) WriteDOCX(w io.Writer, u Units, picture func(Figure) ([]byte,
 		return err
 	}
 	z := zip.NewWriter(w)
+	// One fast compressor serves all parts, which are written one after the other.
+	squeeze, err := flate.NewWriter(io.Discard, flate.BestSpeed)
+	if err != nil {
+		return err
+	}
+	z.RegisterCompressor(zip.Deflate, func(w io.Writer) (io.WriteCloser, error) {
+		squeeze.Reset(w)
+		return squeeze, nil
+	})
 	parts := append([]docxPart{
 		{"[Content_Types].xml", []byte(docxTypes)},
 		{"_rels/.rels", []byte(docxRels)},

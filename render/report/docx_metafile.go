@@ -123,13 +123,13 @@ func (m *metafile) record(kind uint32, values []int32, raw ...byte) {
 		raw = append(raw, 0)
 	}
 	m.records++
-	put := func(v uint32) { m.b.Write(binary.LittleEndian.AppendUint32(nil, v)) }
-	put(kind)
-	put(uint32(8 + 4*len(values) + len(raw)))
+	m.b.Grow(8 + 4*len(values) + len(raw))
+	out := binary.LittleEndian.AppendUint32(m.b.AvailableBuffer(), kind)
+	out = binary.LittleEndian.AppendUint32(out, uint32(8+4*len(values)+len(raw)))
 	for _, v := range values {
-		put(uint32(v))
+		out = binary.LittleEndian.AppendUint32(out, uint32(v))
 	}
-	m.b.Write(raw)
+	m.b.Write(append(out, raw...))
 }
 
 // begin writes the header, whose counts end fills in, and the mapping.
