@@ -9,7 +9,7 @@ import "math"
 // limit. The limits were set where one untouched test in a hundred conflicts on
 // natural clays.
 const (
-	conflictAt   = 3.0
+	conflictAt   = 2.95
 	conflictWild = 4.0
 	doubtAt      = 2.0
 )

@@ -39,8 +39,17 @@ func (p *posterior) predict(depths []float64) []mixture {
 			}
 		}
 	})
+	filled := 0
+	for _, g := range groups {
+		if g.at != nil {
+			filled++
+		}
+	}
 	out := make([]mixture, len(depths))
+	store := make([]float64, 3*filled*len(depths))
 	for j := range depths {
+		part := func(i int) []float64 { at := (3*j + i) * filled; return store[at : at : at+filled] }
+		out[j] = mixture{part(0), part(1), part(2)}
 		for _, g := range groups {
 			if g.at != nil && g.at[j].weight > 0 {
 				m := g.at[j]
