@@ -35,7 +35,7 @@ func Compose(c Content) *Document {
 	s := p.Site
 	t := s.Settings.Title
 	d := &Document{Title: orElse(t.Title, "Stress history of the ground"), Subtitle: subtitle(s), Running: running(t), Fields: fields(t)}
-	d.add("summary", "Findings in short", summaryBlocks(p)...)
+	d.add("summary", "In short", summaryBlocks(c)...)
 	d.add("basis", "Basis and definitions", basis(s)...)
 	d.add("ground", "Ground and water", Layers(s), Water(s))
 	for i := range figures.Depth {
@@ -131,10 +131,12 @@ func fields(t profile.TitleBlock) []Field {
 	}
 }
 
-func summaryBlocks(p *profile.Profile) []Block {
-	var out []Block
-	for i := range p.Boreholes {
-		b := &p.Boreholes[i]
+// summaryBlocks say what was looked at, what the findings are, and the stress
+// history of each stratum.
+func summaryBlocks(c Content) []Block {
+	out := []Block{Paragraph(scopeWords(c.Profile)), Paragraph(findingWords(c.Found))}
+	for i := range c.Profile.Boreholes {
+		b := &c.Profile.Boreholes[i]
 		sentences := Summary(b)
 		if len(sentences) == 0 {
 			out = append(out, Paragraph(b.Borehole+": no stress history; see the notes."))
@@ -143,6 +145,53 @@ func summaryBlocks(p *profile.Profile) []Block {
 		out = append(out, Paragraph(b.Borehole+":"), List(sentences))
 	}
 	return out
+}
+
+// scopeWords count what a report rests on.
+func scopeWords(p *profile.Profile) string {
+	results, tests, soundings := 0, 0, 0
+	for i := range p.Boreholes {
+		results += len(p.Boreholes[i].Results)
+		tests += len(p.Boreholes[i].Tests)
+		if p.Boreholes[i].Cone != nil {
+			soundings++
+		}
+	}
+	parts := []string{counted(len(p.Boreholes), "borehole"), counted(results, "row") + " of results", counted(tests, "preconsolidation test"), counted(len(p.Specimens), "oedometer curve")}
+	if soundings > 0 {
+		parts = append(parts, counted(soundings, "cone sounding"))
+	}
+	return "This report rests on " + strings.Join(parts, ", ") + "."
+}
+
+// findingWords count the findings by severity and name the open ones that matter
+// most.
+func findingWords(fs review.Findings) string {
+	open := fs.Open()
+	if len(open) == 0 {
+		return "No finding is open."
+	}
+	var parts []string
+	for i := len(review.Severities) - 1; i >= 0; i-- {
+		n := 0
+		for j := range open {
+			if open[j].Severity == review.Severities[i] {
+				n++
+			}
+		}
+		if n > 0 {
+			parts = append(parts, fmt.Sprintf("%d %s", n, review.Severities[i]))
+		}
+	}
+	text := fmt.Sprintf("%s open: %s.", counted(len(open), "finding"), strings.Join(parts, ", "))
+	if heavy := open.AtLeast(review.Conflict); len(heavy) > 0 {
+		var places []string
+		for i := range heavy {
+			places = append(places, place(&heavy[i]))
+		}
+		text += " To be settled before the values are used: " + strings.Join(places, "; ") + "."
+	}
+	return text
 }
 
 func basis(s *profile.Site) []Block {
@@ -226,8 +275,43 @@ func limitations(p *profile.Profile) []Block {
 	return []Block{
 		Assumptions(p.Boreholes...),
 		notes,
+		furtherTests(p),
 	}
 }
+
+// furtherTests proposes what would tell most, each with what it rests on.
+func furtherTests(p *profile.Profile) *Table {
+	t := &Table{
+		Name: "further-tests", Title: "Suggested further tests",
+		Columns: []Column{
+			{"borehole", "borehole", Words, 0}, {"depth", "depth", Length, 1}, {"stratum", "stratum", Words, 0}, {"test", "test", Words, 0}, {"because", "reason", Words, 0},
+		},
+	}
+	for i := range p.Boreholes {
+		b := &p.Boreholes[i]
+		if n := b.NextTest; n != nil && n.Narrowing >= worthATest {
+			t.Add(T(b.Borehole), N(n.Depth), T(n.Stratum), T("oedometer on a specimen of the best class"),
+				T(fmt.Sprintf("there it would narrow the band of σ′p of this borehole most, by about %.0f %% on average", 100*n.Narrowing)))
+		}
+		for _, x := range b.Tests {
+			if x.Bound == profile.AtLeast {
+				t.Add(T(b.Borehole), N(x.Depth), T(x.Stratum), T("oedometer carried to at least eight times the expected yield stress"),
+					T(orUnnamedTest(x.Specimen)+" stopped before its virgin line and gives a bound only"))
+			}
+		}
+		for _, z := range b.Zones {
+			if z.Zone == profile.Underconsolidated {
+				t.Add(T(b.Borehole), N((z.Top+z.Base)/2), T(""), T("piezometer"),
+					T(fmt.Sprintf("%s to %s m looks underconsolidated: only the pore pressure tells settling ground from disturbed specimens", depth(z.Top), depth(z.Base))))
+			}
+		}
+	}
+	return t
+}
+
+// worthATest is the narrowing of the band below which one more test is not
+// proposed.
+const worthATest = 0.03
 
 func sourceBlocks(s *profile.Site) []Block {
 	return []Block{
