@@ -77,7 +77,7 @@ func (c *common) printed(cmd *cobra.Command, path string) ([]report.Printed, err
 		return nil, err
 	}
 	tables := report.Tables(report.Content{Profile: p, Found: found, Values: values, Design: true})
-	return report.Print(append(tables, report.SettingsTable(p.Site)), c.unitSystem())
+	return report.Print(tables, c.unitSystem())
 }
 
 // reportTables returns the folder of the tables of a report: a site has none

@@ -220,7 +220,7 @@ func record(site, path string, d profile.Decision) error {
 // holds tells whether a site reads, and its last decision is the one recorded
 // and is about something that is there.
 func holds(site string, d profile.Decision) error {
-	p, err := load(site, profile.Options{}, nil)
+	p, err := load(site, profile.Options{}, intake.Options{})
 	if err != nil {
 		return err
 	}

@@ -37,10 +37,24 @@ func newDesignCommand() *cobra.Command {
 				return err
 			}
 			var strata []design.Stratum
+			var points []design.LinePoint
 			for _, p := range profiles {
 				s, err := opt.Values(p)
 				if err != nil {
 					return err
+				}
+				site := ""
+				if len(profiles) > 1 { // strata and boreholes of one name at two sites are two
+					site = p.Site.Name + "/"
+				}
+				for i := range p.Boreholes {
+					for _, l := range design.Line(p.Boreholes[i], s) {
+						l.Borehole = site + l.Borehole
+						points = append(points, l)
+					}
+				}
+				for i := range s {
+					s[i].Stratum = site + s[i].Stratum
 				}
 				strata = append(strata, s...)
 			}
@@ -49,12 +63,9 @@ func newDesignCommand() *cobra.Command {
 				Line   []design.LinePoint `json:"line,omitempty"`
 			}{Strata: strata}
 			tables := []*report.Table{report.Design(strata), report.DesignWarnings(strata)}
-			all := together(profiles)
 			if line {
-				for i := range all.Boreholes {
-					value.Line = append(value.Line, design.Line(all.Boreholes[i], strata)...)
-				}
-				tables = []*report.Table{report.Line(all, strata)}
+				value.Line = points
+				tables = []*report.Table{report.Line(points)}
 			} else if ways {
 				tables = append([]*report.Table{report.Ways(strata)}, tables...)
 			} else if c.format == "table" {

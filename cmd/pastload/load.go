@@ -19,7 +19,7 @@ func (c *common) loadAll(cmd *cobra.Command, paths []string, opt profile.Options
 	errs := make([]error, len(paths))
 	var wait sync.WaitGroup
 	for i, path := range paths {
-		wait.Go(func() { profiles[i], errs[i] = load(path, opt, need) })
+		wait.Go(func() { profiles[i], errs[i] = load(path, opt, intake.Options{Need: need, Decimal: c.decimal}) })
 	}
 	wait.Wait()
 	if err := mergeErrors(errs); err != nil {
@@ -33,8 +33,8 @@ func (c *common) loadAll(cmd *cobra.Command, paths []string, opt profile.Options
 	return profiles, nil
 }
 
-func load(path string, opt profile.Options, need []intake.Table) (*profile.Profile, error) {
-	site, err := intake.Read(path, intake.Options{Need: need})
+func load(path string, opt profile.Options, in intake.Options) (*profile.Profile, error) {
+	site, err := intake.Read(path, in)
 	if err != nil {
 		return nil, err
 	}

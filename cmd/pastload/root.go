@@ -15,6 +15,7 @@ type common struct {
 	format  string
 	output  string
 	units   string
+	decimal string
 	quiet   bool
 	noColor bool
 }
@@ -25,6 +26,7 @@ func (c *common) register(cmd *cobra.Command) {
 	f.StringVar(&c.format, "format", "table", "how to print the results: table, csv or json")
 	f.StringVarP(&c.output, "output", "o", "", "write to this file (folder for draw and report) instead of standard output")
 	f.StringVar(&c.units, "units", "si", "units of tables and CSV: si or us; JSON is always SI")
+	f.StringVar(&c.decimal, "decimal", "", "the decimal mark of the tables, . or , where a file does not tell it by itself")
 	f.BoolVar(&c.quiet, "quiet", false, "print no remarks, only results and errors")
 	f.BoolVar(&c.noColor, "no-color", false, "print no colour (the output has none today; accepted for scripts)")
 	choices(cmd, "format", "table", "csv", "json")
@@ -44,6 +46,11 @@ func (c *common) check() error {
 	case "table", "csv", "json":
 	default:
 		return usagef("--format %q: want table, csv or json", c.format)
+	}
+	switch c.decimal {
+	case "", ".", ",":
+	default:
+		return usagef("--decimal %q: want . or ,", c.decimal)
 	}
 	switch c.units {
 	case "si", "us":

@@ -23,7 +23,9 @@ type Content struct {
 	Values  []design.Stratum
 	Found   review.Findings
 	Effects []design.Effect
-	Design  bool // cautious and adopted values go in; without it the report keeps to what was measured and derived
+	Since   string   // the earlier report that Changes are counted from, "" for none
+	Changes []Change // since then
+	Design  bool     // cautious and adopted values go in; without it the report keeps to what was measured and derived
 }
 
 // Compose arranges a report on a site in the order in which its reader asks:
@@ -36,6 +38,9 @@ func Compose(c Content) *Document {
 	t := s.Settings.Title
 	d := &Document{Title: orElse(t.Title, "Stress history of the ground"), Subtitle: subtitle(s), Running: running(t), Fields: fields(t)}
 	d.add("summary", "In short", summaryBlocks(c)...)
+	if c.Since != "" {
+		d.add("changes", "Changes since the earlier issue", Paragraph("Compared with "+c.Since+". "+ChangesSummary(c.Changes)), ChangesTable(Brief(c.Changes)))
+	}
 	d.add("basis", "Basis and definitions", basis(s)...)
 	d.add("ground", "Ground and water", Layers(s), Water(s))
 	for i := range figures.Depth {
@@ -55,6 +60,7 @@ func Compose(c Content) *Document {
 	d.add("findings", "Findings and decisions", findingBlocks(c)...)
 	d.add("values", "Values per stratum", valueBlocks(c.Values, c.Design)...)
 	d.add("results", "Results as read", Results(s))
+	d.add("hand-check", "One depth worked by hand", handCheck(p)...)
 	d.add("assumptions", "Assumptions and limitations", limitations(p)...)
 	d.add("sources", "Tables read", sourceBlocks(s)...)
 	d.add("cautions", "Cautions", List(cautions))
@@ -203,13 +209,7 @@ func basis(s *profile.Site) []Block {
 		Paragraph(fmt.Sprintf("The unit weight of water is %.2f kN/m³. Low, best and high are the 5, 50 and 95 %% points. The effective stress is taken as uncertain by %.0f %% of the weight of the ground and by %.2f m of water level (one standard deviation), which is carried into OCR.",
 			s.Settings.WaterUnitWeight, 100*s.Settings.UnitWeightUncertainty, s.Settings.WaterLevelUncertainty)),
 	}
-	settings := &Table{Name: "settings", Title: "Settings as given", Columns: []Column{
-		{"setting", "setting", Words, 0}, {"value", "value", Words, 0}, {"unit", "unit", Words, 0}, {"note", "note", Words, 0},
-	}}
-	for _, g := range s.Settings.Given {
-		settings.Add(T(g.Name), T(g.Value), T(g.Unit), T(g.Note))
-	}
-	return append(out, settings)
+	return append(out, SettingsTable(s))
 }
 
 // trim writes a limit without trailing zeros.
@@ -277,6 +277,36 @@ func limitations(p *profile.Profile) []Block {
 		notes,
 		furtherTests(p),
 	}
+}
+
+// handCheck shows the arithmetic of one depth, so that a checker can redo it: the
+// stresses and the ratio of the first used test that has them.
+func handCheck(p *profile.Profile) []Block {
+	for i := range p.Boreholes {
+		for _, t := range p.Boreholes[i].Tests {
+			if !t.Used || !t.OCR.Known {
+				continue
+			}
+			e, err := profile.Explain(p, p.Boreholes[i].Borehole, t.Depth)
+			if err != nil {
+				continue
+			}
+			var steps []profile.Step
+			for _, s := range e.Steps {
+				for _, group := range []string{"Place", "Total vertical stress", "Pore pressure", "Effective stress", "Given stress", "Preconsolidation test"} {
+					if strings.HasPrefix(s.Group, group) {
+						steps = append(steps, s)
+					}
+				}
+			}
+			e.Steps = steps
+			return []Block{
+				Paragraph(fmt.Sprintf("Every number of this report can be shown in this way with the command explain, here for %s at %s m.", e.Borehole, depth(e.Depth))),
+				Explanation(e).Only("group", "step", "formula", "numbers", "value", "unit", "source"),
+			}
+		}
+	}
+	return nil
 }
 
 // furtherTests proposes what would tell most, each with what it rests on.

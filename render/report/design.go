@@ -61,9 +61,13 @@ func Design(strata []design.Stratum) *Table {
 			slope, trend := Cell{}, "none to be told"
 			if p.Trend != nil {
 				slope = q(profile.Known(p.Trend.Slope))
-				trend = "not real"
-				if p.Trend.Real {
-					trend = "real"
+				switch {
+				case p.Trend.Used:
+					trend = "followed"
+				case p.Trend.Real:
+					trend = "real, too small to follow"
+				default:
+					trend = "not real"
 				}
 			}
 			t.Add(T(orUnnamed(s.Stratum)), T(orElse(s.Borehole, "all")), T(p.Parameter), U(d),
@@ -126,9 +130,18 @@ func DesignWarnings(strata []design.Stratum) *Table {
 	return t
 }
 
-// Line returns the design line of boreholes: what a settlement calculation needs
-// at every depth.
-func Line(p *profile.Profile, strata []design.Stratum) *Table {
+// Lines returns the design line of every borehole of a profile.
+func Lines(p *profile.Profile, strata []design.Stratum) *Table {
+	var points []design.LinePoint
+	for i := range p.Boreholes {
+		points = append(points, design.Line(p.Boreholes[i], strata)...)
+	}
+	return Line(points)
+}
+
+// Line returns a design line as a table: what a settlement calculation needs at
+// every depth.
+func Line(points []design.LinePoint) *Table {
 	t := &Table{
 		Name: "design-line", Title: "Design line of the preconsolidation stress with depth",
 		Columns: []Column{
@@ -141,13 +154,11 @@ func Line(p *profile.Profile, strata []design.Stratum) *Table {
 		},
 		Note: "between tests: the depth lies between tests of its stratum in this borehole; elsewhere the line is an extrapolation.",
 	}
-	for i := range p.Boreholes {
-		for _, l := range design.Line(p.Boreholes[i], strata) {
-			t.Add(T(l.Borehole), N(l.Depth), T(l.Stratum), number(l.UnitWeight), number(l.Pore), number(l.Effective),
-				number(l.PreconsolidationLow), number(l.PreconsolidationBest), number(l.PreconsolidationHigh), number(l.Adopted), T(l.AdoptedBasis), T(yes(l.Tested)),
-				number(l.VoidRatio.Mean), number(l.CompressionIndex.Mean), number(l.CompressionIndex.Cautious), number(l.CompressionIndex.Adopted),
-				number(l.RecompressionIndex.Mean), number(l.RecompressionIndex.Cautious), number(l.RecompressionIndex.Adopted))
-		}
+	for _, l := range points {
+		t.Add(T(l.Borehole), N(l.Depth), T(l.Stratum), number(l.UnitWeight), number(l.Pore), number(l.Effective),
+			number(l.PreconsolidationLow), number(l.PreconsolidationBest), number(l.PreconsolidationHigh), number(l.Adopted), T(l.AdoptedBasis), T(yes(l.Tested)),
+			number(l.VoidRatio.Mean), number(l.CompressionIndex.Mean), number(l.CompressionIndex.Cautious), number(l.CompressionIndex.Adopted),
+			number(l.RecompressionIndex.Mean), number(l.RecompressionIndex.Cautious), number(l.RecompressionIndex.Adopted))
 	}
 	return t
 }
