@@ -32,6 +32,8 @@ type Specimen struct {
 	Reasons          []string      `json:"reasons"`
 	Notes            []string      `json:"notes"`
 
+	Stages []StageValue `json:"stages"`
+
 	Curve          *Curve                   `json:"-"`
 	Prepared       oedometer.Curve          `json:"-"`
 	Interpretation oedometer.Interpretation `json:"-"`
@@ -45,6 +47,20 @@ type MethodValue struct {
 	Used   bool   `json:"used"`
 	Note   string `json:"note"`
 	Mark   string `json:"verified"`
+}
+
+// StageValue is what one load stage says about stiffness and flow.
+type StageValue struct {
+	From            float64 `json:"from_kPa"`
+	To              float64 `json:"to_kPa"`
+	Branch          string  `json:"branch"`
+	Compressibility Number  `json:"mv_m2_MN"`
+	Modulus         Number  `json:"constrained_modulus_kPa"`
+	Consolidation   Number  `json:"cv_m2_year"`
+	ConsolidationBy string  `json:"cv_from,omitempty"` // as given, or from t50 or t90
+	Permeability    Number  `json:"k_m_s"`
+	Secondary       Number  `json:"secondary_compression_index"`
+	Source          *Cell   `json:"-"`
 }
 
 // Quality is the sample rated by one scheme.
@@ -64,7 +80,7 @@ func specimens(site *Site, grounds []*ground) ([]Specimen, Problems) {
 	var problems Problems
 	for i := range site.Curves {
 		c := &site.Curves[i]
-		sp := Specimen{Name: c.Specimen, Borehole: c.Borehole, Depth: c.Depth, TestKind: c.TestKind, Grade: gradeNone, Curve: c, Methods: []MethodValue{}, Reasons: []string{}, Notes: []string{}}
+		sp := Specimen{Name: c.Specimen, Borehole: c.Borehole, Depth: c.Depth, TestKind: c.TestKind, Grade: gradeNone, Curve: c, Methods: []MethodValue{}, Stages: []StageValue{}, Reasons: []string{}, Notes: []string{}}
 		situation := situationOf(grounds, c)
 		if situation.EffectiveStress.Known {
 			sp.Effective = Known(situation.EffectiveStress.Value)
@@ -190,6 +206,18 @@ func (sp *Specimen) interpret(prepared oedometer.Curve, situation oedometer.Situ
 			v.Stress = Known(m.Stress)
 		}
 		sp.Methods = append(sp.Methods, v)
+	}
+	for _, st := range in.Stages {
+		v := StageValue{
+			From: st.From, To: st.To, Branch: st.Branch.String(), Compressibility: Known(st.Compressibility), Modulus: siteNumber(st.Modulus),
+			Consolidation: siteNumber(st.Consolidation), ConsolidationBy: st.ConsolidationHow, Permeability: siteNumber(st.Permeability), Secondary: siteNumber(st.Secondary),
+		}
+		for i := range sp.Curve.Stages {
+			if c := sp.Curve.Stages[i].Source; c != nil && c.Line == st.Line {
+				v.Source = c
+			}
+		}
+		sp.Stages = append(sp.Stages, v)
 	}
 	sp.yield(in.Preconsolidation)
 	sp.CompressionIndex = siteNumber(in.CompressionIndex)

@@ -1,6 +1,7 @@
 package report
 
 import (
+	"strconv"
 	"strings"
 
 	"pastload/profile"
@@ -47,6 +48,31 @@ func Methods(ss []profile.Specimen) *Table {
 	for _, s := range ss {
 		for _, m := range s.Methods {
 			t.Add(T(s.Borehole), T(s.Name), T(m.Method), number(m.Stress), T(yes(m.Used)), T(m.Note), T(m.Mark))
+		}
+	}
+	return t
+}
+
+// Stages returns stiffness and flow of every load stage of every test.
+func Stages(ss []profile.Specimen) *Table {
+	t := &Table{
+		Name: "stages", Title: "Oedometer tests: stiffness and flow by stage",
+		Columns: []Column{
+			{"borehole", "borehole", Words, 0}, {"specimen", "specimen", Words, 0}, {"branch", "branch", Words, 0},
+			{"from", "from", Stress, 1}, {"to", "to", Stress, 1}, {"mv (m²/MN)", "mv_m2_MN", Pure, 3}, {"M", "constrained_modulus", Stress, 0},
+			{"cv (m²/year)", "cv_m2_year", Pure, 2}, {"cv from", "cv_from", Words, 0}, {"k (m/s)", "k_m_s", Words, 0}, {"Cα", "secondary_compression_index", Pure, 4},
+			{"source", "source", Words, 0},
+		},
+		Note: "mv = Δε/Δσ′ of the height at the start of the stage; M = 1/mv; k = cv·mv·γw. cv and k only where the table carries times or cv.",
+	}
+	for _, s := range ss {
+		for _, g := range s.Stages {
+			k := Cell{}
+			if g.Permeability.Known {
+				k = T(strconv.FormatFloat(g.Permeability.Value, 'e', 1, 64))
+			}
+			t.Add(T(s.Borehole), T(s.Name), T(g.Branch), N(g.From), N(g.To), number(g.Compressibility), number(g.Modulus),
+				number(g.Consolidation), T(g.ConsolidationBy), k, number(g.Secondary), T(g.Source.String()))
 		}
 	}
 	return t
