@@ -167,7 +167,7 @@ func scopeWords(p *profile.Profile) string {
 	if soundings > 0 {
 		parts = append(parts, counted(soundings, "cone sounding"))
 	}
-	return "This report rests on " + strings.Join(parts, ", ") + "."
+	return "This report rests on " + strings.Join(parts[:len(parts)-1], ", ") + " and " + parts[len(parts)-1] + "."
 }
 
 // findingWords count the findings by severity and name the open ones that matter
@@ -186,7 +186,7 @@ func findingWords(fs review.Findings) string {
 			}
 		}
 		if n > 0 {
-			parts = append(parts, fmt.Sprintf("%d %s", n, review.Severities[i]))
+			parts = append(parts, counted(n, string(review.Severities[i])))
 		}
 	}
 	text := fmt.Sprintf("%s open: %s.", counted(len(open), "finding"), strings.Join(parts, ", "))

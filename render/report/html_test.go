@@ -5,6 +5,7 @@ import (
 	"crypto/sha256"
 	"encoding/base64"
 	"fmt"
+	"math"
 	"regexp"
 	"strings"
 	"testing"
@@ -108,4 +109,47 @@ func FuzzHostileText(f *testing.F) {
 			t.Errorf("%d elements, want %d", got, want)
 		}
 	})
+}
+
+// TestContrast measures the colours of the style sheet on white: 4.5:1 for text and
+// 3:1 for rules and the focus ring (WCAG 2 contrast minimum and non-text
+// contrast; thresholds common practice).
+func TestContrast(t *testing.T) {
+	checked := 0
+	for _, m := range regexp.MustCompile(`(color|border|border-bottom|outline):([^;}]*)`).FindAllStringSubmatch(styleSheet, -1) {
+		hex := regexp.MustCompile(`#[0-9a-f]{3,6}`).FindString(m[2])
+		if hex == "" || hex == "#ccc" { // the frame round a drawing on the screen carries no meaning
+			continue
+		}
+		want := 3.0
+		if m[1] == "color" {
+			want = 4.5
+		}
+		if got := contrastOnWhite(t, hex); got < want {
+			t.Errorf("%s:%s has a contrast of %.1f, want %.1f", m[1], m[2], got, want)
+		}
+		checked++
+	}
+	if checked < 5 {
+		t.Errorf("only %d colours found", checked)
+	}
+}
+
+func contrastOnWhite(t *testing.T, hex string) float64 {
+	t.Helper()
+	if len(hex) == 4 {
+		hex = "#" + string([]byte{hex[1], hex[1], hex[2], hex[2], hex[3], hex[3]})
+	}
+	var r, g, b int
+	if _, err := fmt.Sscanf(hex, "#%02x%02x%02x", &r, &g, &b); err != nil {
+		t.Fatal(hex, err)
+	}
+	linear := func(v int) float64 {
+		c := float64(v) / 255
+		if c <= 0.03928 {
+			return c / 12.92
+		}
+		return math.Pow((c+0.055)/1.055, 2.4)
+	}
+	return 1.05 / (0.2126*linear(r) + 0.7152*linear(g) + 0.0722*linear(b) + 0.05)
 }
