@@ -80,9 +80,9 @@ func newModel(k *constants, ms []mechanism, g *ground, depth, effective []float6
 		stress[i] = math.Max(s, lowestStress)
 	}
 	m.lines = make([]line, len(m.nodes))
-	for i := range m.nodes {
+	sideBySide(len(m.nodes), func(i int) {
 		m.lines[i] = m.nodes[i].line(&ms[m.nodes[i].mechanism], g, depth, stress)
-	}
+	})
 	return m
 }
 
