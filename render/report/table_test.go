@@ -136,14 +136,15 @@ func TestWorkbook(t *testing.T) {
 	}
 }
 
-// TestCSVReadsBack: a number written is the number read, to the decimals printed.
+// TestCSVReadsBack: a number written is the number read, to half the last decimal
+// printed and the rounding of the number itself.
 func TestCSVReadsBack(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		v := rapid.Float64Range(-1e6, 1e6).Draw(t, "v")
 		decimals := rapid.IntRange(0, 6).Draw(t, "decimals")
 		c := Column{"x", "x", Pure, decimals}
 		got, err := strconv.ParseFloat(c.Format(N(v), SI), 64)
-		if err != nil || !scalar.EqualWithinAbs(got, v, 0.500001*math.Pow(10, -float64(decimals))) {
+		if err != nil || !scalar.EqualWithinAbs(got, v, 0.5*math.Pow(10, -float64(decimals))+1e-12*math.Abs(v)) {
 			t.Fatalf("%g is written as %q", v, c.Format(N(v), SI))
 		}
 	})
