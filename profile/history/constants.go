@@ -6,17 +6,25 @@ import "math"
 // once on natural clays as a whole, none for a site, and results change little
 // with them: see doc.go.
 type constants struct {
-	Amplitudes, Lengths, Noises choices // of the departure (ln σ′p, m); of the scatter of tests
-	Wild                        float64 // prior probability that a test is wild
-	WildSD                      float64 // sd of the extra error of a wild test, ln σ′p
-	Trusts                      []trust
-	DriftLength                 float64 // over which sources drift, m
-	TiltSD                      float64 // sd of the drift of all sources for a unit of ln σ′v0
-	LayerSD                     float64 // how far a source differs from layer to layer, ln σ′p
+	Departures  []wave
+	Noises      choices // scale on the LnSD of tests
+	Wild        float64 // prior probability that a test is wild
+	WildSD      float64 // sd of the extra error of a wild test, ln σ′p
+	Trusts      []trust
+	DriftLength float64 // over which sources drift, m
+	TiltSD      float64 // sd of the drift of all sources for a unit of ln σ′v0
+	LayerSD     float64 // how far a source differs from layer to layer, ln σ′p
 }
 
 // choices are values with their prior weights.
 type choices []struct{ value, prior float64 }
+
+// wave is one kind of departure from the mechanism.
+type wave struct {
+	amplitude float64 // sd, ln σ′p
+	length    float64 // over which it changes, m
+	prior     float64
+}
 
 // trust is one degree to which sources may stray from σ′p with depth.
 type trust struct {
@@ -27,8 +35,7 @@ type trust struct {
 }
 
 var standard = constants{
-	Amplitudes:  choices{{0.05, 0.67}, {0.20, 0.33}},
-	Lengths:     choices{{2, 0.5}, {8, 0.5}},
+	Departures:  []wave{{0.05, 4, 0.67}, {0.20, 2, 0.165}, {0.20, 8, 0.165}},
 	Noises:      choices{{0.2, 0.35}, {0.6, 0.40}, {1.3, 0.25}},
 	Wild:        0.06,
 	WildSD:      0.7,
@@ -49,16 +56,14 @@ type setting struct {
 // settings returns the grid, for a number of trusts.
 func (k *constants) settings(trusts int) []setting {
 	var out []setting
-	for _, a := range k.Amplitudes {
-		for _, l := range k.Lengths {
-			for _, s := range k.Noises {
-				p := math.Log(a.prior * l.prior * s.prior)
-				if trusts == 0 {
-					out = append(out, setting{a.value, l.value, s.value, 0, p})
-				}
-				for t := range trusts {
-					out = append(out, setting{a.value, l.value, s.value, t, p + math.Log(k.Trusts[t].prior)})
-				}
+	for _, w := range k.Departures {
+		for _, s := range k.Noises {
+			p := math.Log(w.prior * s.prior)
+			if trusts == 0 {
+				out = append(out, setting{w.amplitude, w.length, s.value, 0, p})
+			}
+			for t := range trusts {
+				out = append(out, setting{w.amplitude, w.length, s.value, t, p + math.Log(k.Trusts[t].prior)})
 			}
 		}
 	}

@@ -33,8 +33,9 @@
 // times as probable as before.
 //
 // The departure is a Gaussian process along depth with the Matérn 3/2
-// correlation (1 + x)e^−x, x = √3·Δz/length: smooth, but free to bend. Its
-// amplitude (0.05 or 0.20) and length (2 or 8 m) are averaged over.
+// correlation (1 + x)e^−x, x = √3·Δz/length: smooth, but free to bend. Three
+// kinds are averaged over: amplitude 0.05 and length 4 m, 0.20 and 2 m, 0.20 and
+// 8 m.
 //
 // The scatter of a good test is its LnSD, given by its grade, times a factor
 // that the layer itself teaches (0.2, 0.6 or 1.3, averaged over). A test is wild
@@ -69,7 +70,7 @@
 // follow from the same numbers, so leaving a test out is exact and nothing is
 // fitted again. Averages are finite sums. At each depth the distribution is a
 // mixture with one normal for each mechanism under each setting, which has the
-// mean and variance of all its pieces and wild sets; parts below 1e-4 are left
+// mean and variance of all its pieces and wild sets; parts below 0.05 % are left
 // out. A program written apart by dense linear algebra agrees to 1e-8 on three
 // cases: testdata/independent.py.
 //

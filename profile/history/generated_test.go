@@ -59,7 +59,12 @@ func generate(rng *rand.Rand, k *constants) generated {
 	}
 	base := &ground{top: top, base: top + height, water: water, gamma: 9.81, buoyant: 8}
 	line := m.response(base, p)
-	departure := drawDeparture(rng, &g.in, pick(k.Amplitudes), pick(k.Lengths))
+	wave := k.Departures[0]
+	for u, i := rng.Float64()-wave.prior, 1; u >= 0 && i < len(k.Departures); i++ {
+		wave = k.Departures[i]
+		u -= wave.prior
+	}
+	departure := drawDeparture(rng, &g.in, wave.amplitude, wave.length)
 	noise := pick(k.Noises)
 	for i := range g.in.Tests {
 		t := &g.in.Tests[i]

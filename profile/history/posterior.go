@@ -62,7 +62,7 @@ type posterior struct {
 
 // smallestGroup is the weight below which a mechanism under a setting is left
 // out of a mixture; the others then add to one.
-const smallestGroup = 1e-4
+const smallestGroup = 5e-4
 
 // smallestPair is the share of a node's wild sets from which a pair is thought
 // of when a third test is left out. Without one, of the many pairs that mean
@@ -71,7 +71,7 @@ const smallestPair = 0.01
 
 // hopeless is the log ratio to the best node so far under a setting below which
 // a node is not worked out.
-const hopeless = -35.0
+const hopeless = -22.0
 
 // smallestNode is the weight below which a node under a setting is left out.
 const smallestNode = 1e-5

@@ -16,8 +16,7 @@ import numpy as np
 from scipy.optimize import brentq
 from scipy.special import ndtr, ndtri
 
-AMPLITUDE = [(0.05, 0.67), (0.20, 0.33)]
-LENGTH = [(2.0, 0.5), (8.0, 0.5)]
+DEPARTURE = [(0.05, 4.0, 0.67), (0.20, 2.0, 0.165), (0.20, 8.0, 0.165)]
 NOISE = [(0.2, 0.35), (0.6, 0.40), (1.3, 0.25)]
 TRUST = [(0.7, 0.3, 0.5, 0.5), (2.0, 0.6, 0.9, 0.5)]  # within, drift, common, prior
 WILD, WILD_SD = 0.06, 0.7
@@ -139,7 +138,7 @@ def run(site, z_out, s_out, without=None, own=0.0, pairs=None):
     z_out, s_out = np.array(z_out), np.array(s_out)
     has_sources = any(x["source"] for x in r)
     per_node = []
-    for (a, pa), (length, pl), (noise, pn) in itertools.product(AMPLITUDE, LENGTH, NOISE):
+    for (a, length, pa), (noise, pn) in itertools.product(DEPARTURE, NOISE):
         for ti, t in enumerate(TRUST if has_sources else [(0, 0, 0, 1.0)]):
             base = covariance(r, a, length, noise, t)
             cross = a * a * matern(z_out, z, length)
@@ -170,7 +169,7 @@ def run(site, z_out, s_out, without=None, own=0.0, pairs=None):
                     inv = np.linalg.inv(c)
                     res = y - mean
                     log = -0.5 * res @ inv @ res - 0.5 * np.linalg.slogdet(c)[1] - 0.5 * len(y) * LOG(2 * np.pi)
-                    log += size * LOG(WILD / (1 - WILD)) + LOG(prior * pa * pl * pn * t[3])
+                    log += size * LOG(WILD / (1 - WILD)) + LOG(prior * pa * pn * t[3])
                     logs.append(log)
                     means.append(mean_out + k_out @ inv @ res)
                     variances.append(v_out - np.einsum("ij,jk,ik->i", k_out, inv, k_out))
@@ -216,7 +215,7 @@ def combine(per_node, count, light):
 
 def trim(m):
     total = sum(x[0] for x in m)
-    m = [x for x in m if x[0] >= 1e-4 * total]
+    m = [x for x in m if x[0] >= 5e-4 * total]
     total = sum(x[0] for x in m)
     return np.array([(w / total, a, b) for w, a, b in m])
 
