@@ -34,7 +34,7 @@ func ExampleInfer() {
 	// Output:
 	//  2.0 m: σ′p  85 kPa (80 to 90), OCR 3.4
 	//  6.0 m: σ′p 118 kPa (112 to 123), OCR 2.1
-	// 11.0 m: σ′p 156 kPa (148 to 166), OCR 1.6
+	// 11.0 m: σ′p 156 kPa (147 to 167), OCR 1.6
 	// test 5 conflicts: 66 kPa, where the others expect 133 kPa
 	// removed overburden
 }
