@@ -34,7 +34,7 @@ func (g *ground) tellHistory(site *Site, p *Profile, b *BoreholeProfile, station
 		tellPoint(&b.Points[in.point[i]], &result.Points[i])
 	}
 	for i, t := range result.Tests {
-		if t.Used {
+		if t.Verdict != "" { // bounds are judged too, though they are no points on the line
 			tellTest(&b.Tests[in.Tests[i].ID], &t)
 		}
 	}
