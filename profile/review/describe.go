@@ -40,6 +40,11 @@ func (c *context) rowFindings(r *row) []Finding {
 		next := hs[0].apply(now)
 		rd2 := c.read(next)
 		restored := c.restored(&rd, &rd2, broken)
+		if len(restored) == 1 && usual(hs, c.relations[restored[0]].vars[0]) {
+			next = hs[0].apply(now)
+			rd2 = c.read(next)
+			restored = c.restored(&rd, &rd2, broken)
+		}
 		if len(restored) == 0 || changed&hs[0].mask() != 0 {
 			break
 		}
@@ -48,6 +53,21 @@ func (c *context) rowFindings(r *row) []Finding {
 		now, rd = next, rd2
 	}
 	return append(out, c.leftOver(now, &rd, changed)...)
+}
+
+// usual puts the change of the variable that a check speaks of first. One broken
+// check is mended by many changes: a slip elsewhere that happens to fit is no
+// evidence.
+func usual(hs []change, v variable) bool {
+	for i := range hs {
+		if (hs[i].v == v || hs[i].pair && hs[i].other == v) && hs[i].gain > hs[0].gain-3.5 {
+			h := hs[i]
+			copy(hs[1:i+1], hs[:i])
+			hs[0] = h
+			return i > 0
+		}
+	}
+	return false
 }
 
 // restored returns the broken relations that agree after a change.
@@ -117,7 +137,7 @@ func (c *context) belowOne(rd *reading) bool {
 // suggest adds the change that would restore agreement.
 func (c *context) suggest(f *Finding, r *row, h *change, makes int) {
 	if h.pair {
-		f.Message += fmt.Sprintf(" Exchanged, they would make %s agree.", checks(makes))
+		f.Message += fmt.Sprintf(" %s and %s exchanged would make %s agree.", traits[h.v].symbol, traits[h.other].symbol, checks(makes))
 		f.Suggested = &Suggestion{Quantity: traits[h.v].quantity, Value: known(h.v, h.slip.value), How: h.slip.how, Makes: makes}
 		f.Wanted = h.v.text(h.slip.value)
 		f.Causes = putFirst(f.Causes, h.slip.how)

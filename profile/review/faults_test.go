@@ -299,6 +299,9 @@ func plantWater(rng *rand.Rand, s *profile.Site) (planted, bool) {
 	if rng.Intn(2) == 0 && now*10 < 15 && now*9 > 3 {
 		to = now * 10
 	}
+	if len(b.Water) > 0 && b.Water[0].Depth.Value < to+0.5 {
+		b.Water = nil // a pressure above the table is refused before it can be reviewed
+	}
 	b.WaterTableDepth = typed(to, 2, "boreholes.csv", b.WaterTableDepth.Source.Line)
 	return planted{[]Place{{Borehole: b.Name}}, []string{"water table depth"}}, true
 }

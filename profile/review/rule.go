@@ -37,7 +37,7 @@ const (
 func Rules() []Rule { return slices.Clone(rules) }
 
 // rules is filled from one list for each subject.
-var rules = slices.Concat(rangeRules, limitRules, phaseRules, indexRules, stratumRules, stressRules, strengthRules, curveRules, placeRules, boreholeRules, siteRules)
+var rules = slices.Concat(rangeRules, limitRules, phaseRules, indexRules, stratumRules, stressRules, voidIndexRules, strengthRules, curveRules, placeRules, boreholeRules, siteRules)
 
 // ruleByID finds a rule of our own lists.
 func ruleByID(id string) *Rule {

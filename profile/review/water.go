@@ -52,7 +52,38 @@ func (c *context) waterClues(b *profile.Borehole, p *profile.BoreholeProfile) []
 			clues = append(clues, clue)
 		}
 	}
+	if clue, ok := c.softAbove(b, now); ok {
+		clues = append(clues, clue)
+	}
 	return clues
+}
+
+// softAbove returns what soft ground says: above the water table clay dries to a
+// crust, so that a liquidity index above 0.5 there is unusual.
+func (c *context) softAbove(b *profile.Borehole, now float64) (waterClue, bool) {
+	var soft []float64
+	for _, r := range c.rows {
+		if r.borehole != b || !r.depth.Known || r.organic {
+			continue
+		}
+		if li, _, ok := liquidity(r); ok && li > 0.5 {
+			soft = append(soft, r.depth.Value)
+		}
+	}
+	above := func(d float64) int {
+		n := 0
+		for _, z := range soft {
+			if z < d-0.5 {
+				n++
+			}
+		}
+		return n
+	}
+	if above(now) == 0 {
+		return waterClue{}, false
+	}
+	return waterClue{at: math.NaN(), z: func(d float64) float64 { return 1.3 * math.Min(3, float64(above(d))) },
+		say: fmt.Sprintf("%s with a liquidity index above 0.5 would lie above it, where clay dries to a crust", plural(above(now), "specimen"))}, true
 }
 
 // neighbourWater returns the water table depth that the other boreholes suggest:
@@ -166,7 +197,7 @@ func (c *context) judgeWater(b *profile.Borehole, clues []waterClue) (Finding, b
 			try(slip{value: d, cost: 2.5})
 		}
 	}
-	if gain < 1.5 {
+	if gain < 1.5 || len(clues) == 0 {
 		return Finding{}, false
 	}
 	f := Finding{Borehole: b.Name, Quantity: "water table depth", Severity: Doubt, Found: fixed(now, 2) + " m", Wanted: "about " + fixed(best.value, 1) + " m"}

@@ -27,7 +27,6 @@ func (c *context) explainYield(f *Finding, r *row) {
 			}
 		}
 	}
-	f.Causes = putFirst(f.Causes[1:], f.Causes[0])
 	if r.effective.Known && r.v[preconsolidation] < r.effective.Value {
 		f.Message += c.excessPressure(f, r)
 	}
