@@ -67,6 +67,9 @@ wait for each other.`,
 			if err := complete(&decision, p); err != nil {
 				return err
 			}
+			if err := undecided(decision, p.Site); err != nil {
+				return err
+			}
 			if err := record(args[0], path, decision); err != nil {
 				return err
 			}
@@ -163,6 +166,19 @@ func complete(d *profile.Decision, p *profile.Profile) error {
 			if d.Quantity == "preconsolidation stress" && d.Concerns(p.Boreholes[i].Borehole, t.Depth, t.Specimen) && t.Preconsolidation.Known {
 				d.Seen = profile.Known(t.Preconsolidation.Best)
 			}
+		}
+	}
+	return nil
+}
+
+// undecided refuses a second decision on the same value: the first is changed in
+// its row, or both would stand in the table.
+func undecided(d profile.Decision, site *profile.Site) error {
+	for i := range site.Decisions {
+		old := &site.Decisions[i]
+		if strings.EqualFold(old.Quantity, d.Quantity) && strings.EqualFold(old.Borehole, d.Borehole) &&
+			strings.EqualFold(old.Specimen, d.Specimen) && old.Depth.Known == d.Depth.Known && old.Depth.Value == d.Depth.Value {
+			return usagef("%s is decided on already at %s: change it there", d.Quantity, old.Source)
 		}
 	}
 	return nil

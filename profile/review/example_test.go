@@ -43,17 +43,3 @@ func ExampleReview() {
 	// cause: two digits exchanged
 	// next:  Recompute from the masses and the ring volume; take the final w and e of the test as a check.
 }
-
-func ExampleRecord() {
-	table := []byte("borehole,depth (m),specimen,quantity,decision,value,value seen,reason,by,date\n")
-	table, err := review.Record(table, profile.Decision{
-		Borehole: "BH1", Depth: profile.Known(5.6), Specimen: "P5", Quantity: "water content",
-		Decision: profile.AdoptValue, Value: profile.Known(57.1), Seen: profile.Known(75.1),
-		Reason: "confirmed by the laboratory", By: "E.V.", Date: "2021-12-02",
-	})
-	fmt.Print(string(table), err)
-	// Output:
-	// borehole,depth (m),specimen,quantity,decision,value,value seen,reason,by,date
-	// BH1,5.6,P5,water content,adopt value,57.1,75.1,confirmed by the laboratory,E.V.,2021-12-02
-	// <nil>
-}
