@@ -111,8 +111,12 @@ func (g *ground) layer(site *Site, s *Stratum) (insitu.Layer, Problems) {
 	}
 	gamma, message, ok := g.substitute(site, s)
 	if !ok {
+		source := s.Source
+		if source == nil && len(b.Results) > 0 {
+			source = b.Results[0].Source // no strata table: the first result is the place to start
+		}
 		return layer, Problems{{
-			Source: s.Source, Place: "borehole " + b.Name, Quantity: "unit weight",
+			Source: source, Place: "borehole " + b.Name, Quantity: "unit weight",
 			Found:  fmt.Sprintf("%s (%.2f to %.2f m in %s) has none, and no result in it has a unit weight or a water content that could stand in", name, s.Top, s.Base, b.Name),
 			Wanted: "a unit weight in the strata table, or unit weights (or w and Gs) in the results table",
 		}}

@@ -36,6 +36,9 @@ func (rd *reader) open(place string) (grids map[Table]*grid, single bool) {
 		t, ok := tableOf(strings.TrimSuffix(name, filepath.Ext(name)))
 		if !ok {
 			t = Results
+			if len(rd.opt.Need) > 0 {
+				t = rd.opt.Need[0] // what the caller cannot do without is what the file must be
+			}
 		}
 		if g := rd.openFile(fsys, name, t); g != nil {
 			grids[t] = g

@@ -61,7 +61,8 @@ func (rd *reader) noteFile(file, message string) {
 //
 // A file in a folder, or a sheet of a workbook, is the table whose name it has;
 // others are noted in Site.Notes and not read. A single CSV file is the table of
-// its name, else a results table that is a whole site: it may carry a water
+// its name, else the first that Options.Need names, else a results table that is a
+// whole site: it may carry a water
 // table depth, and its borehole column may be absent.
 //
 // The error, if any, is Problems: every problem of every file, in order.

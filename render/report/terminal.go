@@ -12,6 +12,7 @@ func Terminal(bs []profile.BoreholeProfile) []*Table {
 		points := Points(b).Only("depth", "stratum", "total_stress", "pore_pressure", "effective_stress",
 			"preconsolidation_stress_low", "preconsolidation_stress", "preconsolidation_stress_high", "ocr", "pop", "zone", "zone_probability").
 			Named(b.Borehole + ": stresses and stress history with depth")
+		points.Note = "low and high are the 5 and 95 % points. At a boundary the first row ends the upper stratum and the second begins the lower."
 		tests := Tests(b).Only("depth", "specimen", "stratum", "effective_stress", "bound", "preconsolidation_stress", "laboratory", "ocr",
 			"grade", "expected", "z", "verdict", "used").Named(b.Borehole + ": preconsolidation tests beside what the rest of the ground expects")
 		notes := &Table{Name: "notes", Columns: []Column{{"", "note", Words, 0}}}
