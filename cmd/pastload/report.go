@@ -61,21 +61,25 @@ func newReportCommand() *cobra.Command {
 // one another is made side by side.
 func (c *common) reportFiles(p *profile.Profile, withDesign bool, since string) ([]file, error) {
 	u := c.unitSystem()
-	found, err := review.Review(p)
-	if err != nil {
-		return nil, err
-	}
-	content := report.Content{Profile: p, Found: found, Design: withDesign}
-	err = sideBySide(
-		func() (err error) { content.Figures, err = drawAll(p, found, sheet.A3); return err },
+	content := report.Content{Profile: p, Design: withDesign}
+	err := sideBySide(
+		func() (err error) {
+			if content.Found, err = review.Review(p); err != nil {
+				return err
+			}
+			content.Figures, err = drawAll(p, content.Found, sheet.A3)
+			return err
+		},
 		func() (err error) {
 			content.Values, err = design.Values(p)
 			if err == nil && !withDesign {
 				content.Values = design.WithoutDesign(content.Values)
 			}
+			if err == nil {
+				content.Effects, err = design.Effects(p)
+			}
 			return err
 		},
-		func() (err error) { content.Effects, err = design.Effects(p); return err },
 	)
 	if err != nil {
 		return nil, err
