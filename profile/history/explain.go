@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 	"sort"
+	"strconv"
 	"strings"
 )
 
@@ -15,6 +16,9 @@ const (
 	tellRatio = 1.5
 	tellShare = 0.75
 )
+
+// named is the probability from which an explanation is worth a word.
+const named = 0.1
 
 // explain says how the layer got its history.
 func (l *layer) explain() LayerResult {
@@ -65,18 +69,18 @@ func (l *layer) sentence(r *LayerResult, low, high float64) string {
 	}
 	first := &r.Mechanisms[0]
 	if r.Distinguishable {
-		text := fmt.Sprintf("Most likely %s (probability %.2f): %s.", first.Name, first.Probability, first.sizes(&l.ground))
-		if next := r.Mechanisms[1]; next.Probability >= 0.1 {
-			text += fmt.Sprintf(" Next is %s (%.2f).", next.Name, next.Probability)
+		text := fmt.Sprintf("Most likely %s (%.0f %%): %s.", first.Name, 100*first.Probability, first.sizes(&l.ground))
+		if next := r.Mechanisms[1]; next.Probability >= named {
+			text += fmt.Sprintf(" Next is %s (%.0f %%).", next.Name, 100*next.Probability)
 		}
 		return text + " Geology has to confirm it."
 	}
-	var named []string
+	var possible []string
 	for _, m := range r.Mechanisms {
-		if m.Probability < 0.1 && len(named) >= 2 || len(named) == 4 {
+		if m.Probability < named && len(possible) >= 2 || len(possible) == 3 {
 			break
 		}
-		named = append(named, fmt.Sprintf("%s (%.2f: %s)", m.Name, m.Probability, m.sizes(&l.ground)))
+		possible = append(possible, fmt.Sprintf("%s (%.0f %%; %s)", m.Name, 100*m.Probability, m.sizes(&l.ground)))
 	}
 	why := "the shapes are too alike for the scatter of the tests"
 	switch {
@@ -85,7 +89,7 @@ func (l *layer) sentence(r *LayerResult, low, high float64) string {
 	case high < tellRatio*low:
 		why = fmt.Sprintf("σ′v0 of the tests only goes from %.0f to %.0f kPa", low, high)
 	}
-	return fmt.Sprintf("The mechanisms cannot be told apart (%s). Possible are %s.", why, strings.Join(named, ", "))
+	return fmt.Sprintf("The mechanisms cannot be told apart (%s). Possible are %s.", why, strings.Join(possible, ", or "))
 }
 
 // sizes puts the size of a mechanism in words, with what it assumes.
@@ -94,22 +98,33 @@ func (m *Mechanism) sizes(g *ground) string {
 	switch m.Name {
 	case RemovedOverburden, RemovedAndAged:
 		dry := g.buoyant / (g.buoyant + g.gamma)
-		return fmt.Sprintf("about %.1f m of ground (%.1f to %.1f m) taken away if it lay below water (%.1f kN/m³ buoyant), %.1f m (%.1f to %.1f m) if above (%.1f kN/m³)",
-			p.Best, p.Low, p.High, g.buoyant, p.Best*dry, p.Low*dry, p.High*dry, g.buoyant+g.gamma)
+		return fmt.Sprintf("%s of ground if it lay below water, at %.1f kN/m³ buoyant, or %s above it, at %.1f kN/m³",
+			between(p.Low, p.High, "m"), g.buoyant, between(p.Low*dry, p.High*dry, "m"), g.buoyant+g.gamma)
 	}
 	assumed := ""
 	if m.Name == FormerLowerWater && !g.waterKnown {
 		assumed = " below ground level, where the water is taken to stand today"
 	}
-	unit := ""
-	if p.Unit != "" {
-		unit = " " + p.Unit
+	return p.Name + " " + between(p.Low, p.High, p.Unit) + assumed
+}
+
+// between writes a range with two significant figures: it is known no better.
+func between(low, high float64, unit string) string {
+	text := twoFigures(low) + " to " + twoFigures(high)
+	if unit != "" {
+		text += " " + unit
 	}
-	digits := 1
-	if p.Unit == "" {
-		digits = 2
+	return text
+}
+
+// twoFigures writes a number with two significant figures and no exponent.
+func twoFigures(v float64) string {
+	if v == 0 {
+		return "0"
 	}
-	return fmt.Sprintf("%s %.*f%s (%.*f to %.*f)%s", p.Name, digits, p.Best, unit, digits, p.Low, digits, p.High, assumed)
+	digits := 1 - int(math.Floor(math.Log10(math.Abs(v))))
+	scale := math.Pow(10, float64(digits))
+	return strconv.FormatFloat(math.Round(v*scale)/scale, 'f', max(0, min(digits, 4)), 64)
 }
 
 // sourceResults says what σ′p is over what each source predicts.

@@ -68,7 +68,7 @@ type Known struct {
 // A Station is a depth where the profile is wanted.
 type Station struct {
 	Depth           float64 // m
-	EffectiveStress float64 // σ′v0, kPa; zero or less gives σ′p but no OCR
+	EffectiveStress float64 // σ′v0, kPa; below 0.01 gives σ′p but no OCR
 	LnSD            float64 // sd of ln σ′v0
 	Layer           int     // index in Input.Layers
 }

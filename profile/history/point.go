@@ -57,6 +57,10 @@ func (l *layer) name() string {
 	return fmt.Sprintf("layer %d", l.index+1)
 }
 
+// noStress is the σ′v0 in kPa below which there is no overconsolidation ratio: a
+// millimetre of ground, and less than any pore pressure is known to.
+const noStress = 0.01
+
 // point writes the distribution of ln σ′p at station i. The error of σ′v0 is
 // taken as independent of it.
 func (in *Input) point(i int, m *mixture) Point {
@@ -64,7 +68,7 @@ func (in *Input) point(i int, m *mixture) Point {
 	b := m.band()
 	p := Point{Depth: s.Depth, Layer: s.Layer, Preconsolidation: exponential(b)}
 	_, p.LnSD = m.moments()
-	if s.EffectiveStress <= 0 {
+	if s.EffectiveStress < noStress {
 		return p
 	}
 	p.HasOCR = true

@@ -12,7 +12,7 @@ type Point struct {
 	Depth            float64
 	Layer            int
 	Preconsolidation Band // kPa
-	HasOCR           bool // false where σ′v0 is zero or less
+	HasOCR           bool // false where σ′v0 is below 0.01 kPa
 	OCR              Band
 	POP              Band // kPa
 	Zone             Zone // of OCR.Best

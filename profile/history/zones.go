@@ -7,7 +7,7 @@ import (
 
 // zones cuts a layer into stretches of one zone of OCR, by its median. A
 // boundary lies where the median crosses a limit; its range is where the 5–95 %
-// band holds the limit.
+// band holds the limit. A stretch thinner than thinZone goes to a neighbour.
 func (l *layer) zones(points []Point) []ZoneInterval {
 	var at []int
 	for _, i := range l.stations {
@@ -19,22 +19,69 @@ func (l *layer) zones(points []Point) []ZoneInterval {
 	if len(at) == 0 {
 		return nil
 	}
+	first, final := points[at[0]].Depth, points[at[len(at)-1]].Depth
+	pieces := []piece{{zone: points[at[0]].Zone, top: Band{first, first, first}}}
+	for k := 1; k < len(at); k++ {
+		if zone := points[at[k]].Zone; zone != points[at[k-1]].Zone {
+			b := l.boundary(points, at, k)
+			last := &pieces[len(pieces)-1]
+			last.to, last.base = k, b
+			pieces = append(pieces, piece{zone: zone, from: k, top: b})
+		}
+	}
+	last := &pieces[len(pieces)-1]
+	last.to, last.base = len(at), Band{final, final, final}
 	var out []ZoneInterval
-	top := Band{points[at[0]].Depth, points[at[0]].Depth, points[at[0]].Depth}
-	from := 0
-	for k := 1; k <= len(at); k++ {
-		last := points[at[k-1]]
-		if k < len(at) && points[at[k]].Zone == last.Zone {
-			continue
-		}
-		base := Band{last.Depth, last.Depth, last.Depth}
-		if k < len(at) {
-			base = l.boundary(points, at, k)
-		}
-		out = append(out, l.interval(points, at[from:k], top, base))
-		top, from = base, k
+	for _, p := range joined(pieces) {
+		out = append(out, l.interval(points, at[p.from:p.to], p))
 	}
 	return out
+}
+
+// A piece is a stretch of one zone: the stations from, up to but not including
+// to, between two boundaries.
+type piece struct {
+	zone      Zone
+	from, to  int
+	top, base Band
+}
+
+// thinZone is the thickness in m below which a stretch of another zone is not
+// worth a name of its own (project definition): the boundaries are not known so
+// well, and nobody designs for it.
+const thinZone = 0.3
+
+// joined adds thin stretches to the thicker of their neighbours, the thinnest
+// first. One stretch is left, however thin.
+func joined(pieces []piece) []piece {
+	thickness := func(i int) float64 { return pieces[i].base.Best - pieces[i].top.Best }
+	for len(pieces) > 1 {
+		thin := 0
+		for i := range pieces {
+			if thickness(i) < thickness(thin) {
+				thin = i
+			}
+		}
+		if thickness(thin) >= thinZone {
+			return pieces
+		}
+		into := thin - 1
+		if thin == 0 || thin+1 < len(pieces) && thickness(thin+1) > thickness(into) {
+			into = thin + 1
+		}
+		a, b := min(thin, into), max(thin, into)
+		pieces[a] = piece{zone: pieces[into].zone, from: pieces[a].from, to: pieces[b].to, top: pieces[a].top, base: pieces[b].base}
+		pieces = append(pieces[:b], pieces[b+1:]...)
+		// What the thin stretch parted may be one zone now.
+		for i := 1; i < len(pieces); i++ {
+			if pieces[i].zone == pieces[i-1].zone {
+				pieces[i-1].to, pieces[i-1].base = pieces[i].to, pieces[i].base
+				pieces = append(pieces[:i], pieces[i+1:]...)
+				i--
+			}
+		}
+	}
+	return pieces
 }
 
 // boundary returns the depth of the boundary before station k, with its range.
@@ -94,8 +141,8 @@ func crossing(z1, z2, r1, r2, limit float64) float64 {
 const otherZone = 0.2
 
 // interval describes the stations of one stretch.
-func (l *layer) interval(points []Point, at []int, top, base Band) ZoneInterval {
-	z := ZoneInterval{Layer: l.index, Zone: points[at[0]].Zone, Top: top, Base: base}
+func (l *layer) interval(points []Point, at []int, p piece) ZoneInterval {
+	z := ZoneInterval{Layer: l.index, Zone: p.zone, Top: p.top, Base: p.base}
 	z.OCR = Band{math.Inf(1), 0, 0}
 	var mean [4]float64
 	for _, i := range at {
