@@ -40,7 +40,7 @@ var strength = []Correlation{
 		Formula: "su = (0.23 ± 0.04)·σ′v0·OCR^0.8", Rank: 1,
 		Soil:    "clay of low OCR, PI below 60 %",
 		Scatter: Scatter{Between: 0.18, Within: 0.15, Note: "0.23 ± 0.04 as read, between sites; within a site assumed"},
-		Source:  "Jamiolkowski, Ladd, Germaine & Lancellotta 1985", Verified: FormulaRead,
+		Source:  "Jamiolkowski, Ladd, Germaine & Lancellotta 1985", Verified: FromMemory,
 		Cautions: []string{simpleShear, "0.23 ± 0.04 was read; the exponent is from memory, unverified"},
 	}, 0.23, 0.8),
 	strengthByHistory(Correlation{

@@ -11,13 +11,17 @@ import (
 // Options change what Build gives.
 type Options struct {
 	At []float64 // further output depths, m
+
+	// CurvesOnly leaves boreholes out whose vertical stress cannot be computed, in
+	// place of reporting them: reading a curve does not need it.
+	CurvesOnly bool
 }
 
 // Build computes the profile of every borehole of a site. The error is
 // Problems: every place where the tables do not say enough to compute the
 // vertical stress. Doubts about results are no errors and are not judged here.
 func Build(site *Site, opt Options) (*Profile, error) {
-	grounds, err := newGrounds(site)
+	grounds, err := newGrounds(site, opt)
 	if err != nil {
 		return nil, err
 	}
@@ -51,7 +55,7 @@ func Build(site *Site, opt Options) (*Profile, error) {
 
 // newGrounds settles the unit weights of all boreholes and reports every
 // problem of all of them.
-func newGrounds(site *Site) ([]*ground, error) {
+func newGrounds(site *Site, opt Options) ([]*ground, error) {
 	problems := checkCorrelations(site)
 	var grounds []*ground
 	for i := range site.Boreholes {
@@ -60,6 +64,9 @@ func newGrounds(site *Site) ([]*ground, error) {
 			continue // a borehole that is only listed: nothing was found in it
 		}
 		g, p := newGround(site, b)
+		if len(p) > 0 && opt.CurvesOnly {
+			continue
+		}
 		problems = append(problems, p...)
 		grounds = append(grounds, g)
 	}

@@ -99,8 +99,8 @@ type Point struct {
 	Preconsolidation     Range            `json:"preconsolidation_stress_kPa"`
 	OCR                  Range            `json:"ocr"`
 	POP                  Range            `json:"pop_kPa"`
-	Zone                 Zone             `json:"zone,omitempty"`
-	ZoneProbability      map[Zone]float64 `json:"zone_probability,omitempty"`
+	Zone                 Zone             `json:"zone"` // "" where none is given
+	ZoneProbability      map[Zone]float64 `json:"zone_probability"`
 	CompressionIndex     Range            `json:"compression_index"`
 	UndrainedStrength    Range            `json:"correlated_undrained_strength_kPa"` // by stress history
 	K0                   Range            `json:"correlated_k0"`                     // by stress history
@@ -135,9 +135,9 @@ type Test struct {
 	Interpreted      Range   `json:"interpreted_kPa"`
 	Expected         Range   `json:"expected_kPa"` // leave-one-out
 	Z                Number  `json:"z"`
-	Verdict          string  `json:"verdict,omitempty"`
-	Result           *Result `json:"-"` // nil where only a curve gives it
-	Curve            *Curve  `json:"-"` // nil where only the laboratory gives it
+	Verdict          string  `json:"verdict"` // "" where it is not judged
+	Result           *Result `json:"-"`       // nil where only a curve gives it
+	Curve            *Curve  `json:"-"`       // nil where only the laboratory gives it
 	specimen         *Specimen
 }
 

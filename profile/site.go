@@ -174,17 +174,17 @@ type PastEvent struct {
 // A Decision is what the engineer decided about a value. It is keyed by
 // borehole, depth, specimen and quantity, never by row.
 type Decision struct {
-	Borehole string
-	Depth    Number
-	Specimen string
-	Quantity string
-	Decision string // "leave out", "keep", "adopt value"
-	Value    Number // what is adopted
-	Seen     Number // the value when it was decided
-	Reason   string
-	By       string
-	Date     string
-	Source   *Cell
+	Borehole string `json:"borehole"`
+	Depth    Number `json:"depth_m"`
+	Specimen string `json:"specimen"`
+	Quantity string `json:"quantity"`
+	Decision string `json:"decision"`   // "leave out", "keep", "adopt value"
+	Value    Number `json:"value"`      // what is adopted, in the quantity's own unit
+	Seen     Number `json:"value_seen"` // the value when it was decided
+	Reason   string `json:"reason"`
+	By       string `json:"by"`
+	Date     string `json:"date"`
+	Source   *Cell  `json:"-"`
 }
 
 // A SourceFile is a table that was read.

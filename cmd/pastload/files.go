@@ -4,6 +4,7 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"io/fs"
 	"os"
 	"path/filepath"
 	"strings"
@@ -46,11 +47,26 @@ func undo(made []string, err error) error {
 	return err
 }
 
-// writeWhole writes a file beside its final name and renames it into place.
+// writeWhole writes a file beside its final name and renames it into place. A
+// link is followed, a file keeps its permissions, and what is no file (a device,
+// a pipe) is written to as it is.
 func writeWhole(path string, data []byte) (err error) {
+	if real, err := filepath.EvalSymlinks(path); err == nil {
+		path = real
+	}
+	mode := fs.FileMode(0o644)
+	if info, err := os.Stat(path); err == nil {
+		if info.IsDir() {
+			return fmt.Errorf("%s is a folder; name a file", path)
+		}
+		if !info.Mode().IsRegular() {
+			return writeInto(path, data)
+		}
+		mode = info.Mode().Perm()
+	}
 	t, err := os.CreateTemp(filepath.Dir(path), ".pastload-*")
 	if err != nil {
-		return err
+		return fmt.Errorf("%s could not be written: its folder %w", path, errors.Unwrap(err))
 	}
 	defer func() {
 		if err != nil {
@@ -62,13 +78,26 @@ func writeWhole(path string, data []byte) (err error) {
 	if _, err = t.Write(data); err != nil {
 		return err
 	}
-	if err = t.Chmod(0o644); err != nil {
+	if err = t.Chmod(mode); err != nil {
 		return err
 	}
 	if err = t.Close(); err != nil {
 		return err
 	}
 	return os.Rename(t.Name(), path)
+}
+
+// writeInto writes to a device or a pipe.
+func writeInto(path string, data []byte) error {
+	f, err := os.OpenFile(path, os.O_WRONLY, 0)
+	if err != nil {
+		return err
+	}
+	if _, err := f.Write(data); err != nil {
+		f.Close()
+		return err
+	}
+	return f.Close()
 }
 
 // deliver sends finished results to the file of -o or to standard output.

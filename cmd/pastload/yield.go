@@ -26,7 +26,7 @@ strata and water it also rates the specimens at their present stress.`,
 			if err := c.check(); err != nil {
 				return err
 			}
-			profiles, err := c.loadAll(cmd, paths, profile.Options{}, intake.Oedometer)
+			profiles, err := c.loadAll(cmd, paths, profile.Options{CurvesOnly: true}, intake.Oedometer)
 			if err != nil {
 				return err
 			}

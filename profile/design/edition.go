@@ -34,7 +34,7 @@ func EditionOf(setting string) Edition {
 		return Edition{Name: "EN 1997-1:2004", Term: "characteristic value", Clause: "2.4.5.2", Mark: MarkRead,
 			Basis: "cautious estimate of the value affecting the occurrence of the limit state; with statistics, a chance of a worse governing value of not more than 5 %"}
 	case has("aashto", "fhwa", "lrfd", "modot"):
-		return Edition{Name: "AASHTO-style", Term: "mean value", Mark: MarkRead, means: true,
+		return Edition{Name: "AASHTO-style", Term: "mean value", Mark: MarkMemory, means: true,
 			Basis: "mean, with its coefficient of variation stated apart, where resistance factors were calibrated to means"}
 	}
 	return Edition{Term: "cautious estimate", Mark: MarkChoice, Basis: "no code edition is set"}

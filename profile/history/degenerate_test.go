@@ -102,7 +102,7 @@ func TestDegenerateInput(t *testing.T) {
 		{name: "bounds alone", change: func(in *Input) {
 			in.Tests = []Test{at(4, 40, 200), at(6, 60, 300)}
 			in.Tests[0].Kind, in.Tests[1].Kind = AtLeast, AtMost
-		}, note: "but bounds", narrow: 0.1},
+		}, note: "bounds alone", narrow: 0.1},
 		{name: "no stations", change: func(in *Input) { in.Stations = nil; in.Tests = []Test{at(5, 50, 100)} }},
 		{name: "layer without thickness", change: func(in *Input) { in.Layers[0].Base = in.Layers[0].Top; in.Tests = []Test{at(0, 5, 100)} }, narrow: 0.1},
 		{name: "extreme values", change: func(in *Input) { in.Tests = []Test{at(1, 1e-6, 1e-6), at(5, 1e8, 1e8), at(9, 90, 1e8)} }},

@@ -65,7 +65,7 @@ func (l *layer) stressRange() (low, high float64) {
 // sentence puts the explanation in words.
 func (l *layer) sentence(r *LayerResult, low, high float64) string {
 	if len(l.tests) == 0 {
-		return "No test of σ′p was made here, so nothing is said of how the ground got its history."
+		return "No test here gives σ′p itself, so nothing is said of how the ground got its history."
 	}
 	first := &r.Mechanisms[0]
 	if r.Distinguishable {

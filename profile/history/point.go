@@ -3,6 +3,7 @@ package history
 import (
 	"fmt"
 	"math"
+	"strings"
 )
 
 // tell writes the layer's part of the result.
@@ -27,12 +28,8 @@ func (l *layer) tell(out *Result) {
 	out.Zones = append(out.Zones, l.zones(out.Points)...)
 	out.Layers = append(out.Layers, l.explain())
 	switch n := len(l.tests); {
-	case n == 0 && len(l.sources) > 0:
-		out.Notes = append(out.Notes, l.name()+": no test of σ′p; the profile rests on correlations alone, which err as a whole for a site")
-	case n == 0 && len(l.near) > 0:
-		out.Notes = append(out.Notes, l.name()+": no test of σ′p here; the profile rests on neighbouring boreholes")
-	case n == 0 && len(l.bounds) > 0:
-		out.Notes = append(out.Notes, l.name()+": no test of σ′p but bounds; the profile is what is usual in such ground, cut to them")
+	case n == 0 && len(l.bounds)+len(l.near)+len(l.sources) > 0:
+		out.Notes = append(out.Notes, l.name()+": no test here gives σ′p itself; the profile rests on "+l.restsOn())
 	case n == 0:
 		out.Notes = append(out.Notes, l.name()+": no evidence of σ′p; the profile is what is usual in such ground and no more")
 	case n == 1:
@@ -48,6 +45,28 @@ func (l *layer) tell(out *Result) {
 		out.Notes = append(out.Notes, fmt.Sprintf("%s: %d of %d tests conflict with the rest; which of them are right is not certain, and the band may be too narrow",
 			l.name(), conflicting, len(l.tests)))
 	}
+}
+
+// restsOn names the evidence of a layer that has no exact test.
+func (l *layer) restsOn() string {
+	var parts []string
+	if len(l.bounds) > 0 {
+		parts = append(parts, "bounds")
+	}
+	if len(l.near) > 0 {
+		parts = append(parts, "tests of neighbouring boreholes")
+	}
+	if len(l.sources) > 0 {
+		parts = append(parts, "correlations")
+	}
+	text := strings.Join(parts, " and ")
+	if len(parts) == 1 {
+		text += " alone"
+	}
+	if len(l.sources) > 0 {
+		text += "; correlations err as a whole for a site"
+	}
+	return text
 }
 
 func (l *layer) name() string {

@@ -77,7 +77,7 @@ func (rd *reader) openFolder(fsys fs.FS, folder string, grids map[Table]*grid) {
 	for _, e := range entries {
 		name := e.Name()
 		t, ok := tableOf(strings.TrimSuffix(name, filepath.Ext(name)))
-		if e.IsDir() || strings.HasPrefix(name, ".") {
+		if e.IsDir() || strings.HasPrefix(name, ".") || strings.HasSuffix(name, ".lock") {
 			continue
 		}
 		if isWorkbook(name) && !strings.HasPrefix(name, "~") {

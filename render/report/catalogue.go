@@ -5,6 +5,7 @@ import (
 	"strings"
 
 	"pastload/correlate"
+	"pastload/profile"
 )
 
 // Catalogue lists correlations, a row each.
@@ -20,6 +21,42 @@ func Catalogue(all []correlate.Correlation) *Table {
 	for _, c := range all {
 		t.Add(T(c.ID), T(string(c.Quantity)), T(c.Formula), T(c.Soil), T(c.Family), T(c.Verified.String()), T(c.Source))
 	}
+	return t
+}
+
+// Relations lists the correlations that the numbers of a profile rest on, with
+// how far the coefficients of each were checked.
+func Relations(p *profile.Profile) *Table {
+	used := map[string]bool{}
+	for i := range p.Boreholes {
+		b := &p.Boreholes[i]
+		for _, d := range b.Results {
+			for _, c := range d.Correlations {
+				if c.Counts {
+					used[c.ID] = true
+				}
+			}
+		}
+		if b.Cone != nil {
+			for _, id := range []string{"mayne-1995-qnet", "chen-mayne-1996-du2", "mayne-2005-qeff"} {
+				used[id] = true
+			}
+		}
+		for _, pt := range b.Points {
+			used[profile.StrengthByHistory] = used[profile.StrengthByHistory] || pt.UndrainedStrength.Known
+			if pt.K0.Known {
+				used[profile.K0ByHistory], used[profile.FrictionByIndex] = true, true
+			}
+		}
+	}
+	var rows []correlate.Correlation
+	for _, c := range correlate.All() {
+		if used[c.ID] {
+			rows = append(rows, c)
+		}
+	}
+	t := Catalogue(rows).Only("id", "quantity", "formula", "verified", "source").Named("Correlations that these numbers rest on")
+	t.Name = "relations"
 	return t
 }
 

@@ -56,7 +56,7 @@ func Compose(c Content) *Document {
 	d.add("tests", "Preconsolidation tests", testBlocks(p)...)
 	d.add("curves", "Compression curves", blocks(figures.Curves)...)
 	d.add("cone", "Cone soundings", ConeFactors(p.Boreholes...), ConeNotes(p.Boreholes...), Cone(p.Boreholes...))
-	d.add("compression", "Compressibility", Compression(p.Boreholes...))
+	d.add("compression", "Compressibility and the correlations used", Compression(p.Boreholes...), Relations(p))
 	d.add("findings", "Findings and decisions", findingBlocks(c)...)
 	d.add("values", "Values per stratum", valueBlocks(c.Values, c.Design)...)
 	d.add("results", "Results as read", Results(s))
@@ -218,6 +218,7 @@ func trim(v float64) string { return strings.TrimRight(strings.TrimRight(fixed(v
 func profileBlocks(b *profile.BoreholeProfile) []Block {
 	points := Points(*b).Only("depth", "stratum", "unit_weight", "total_stress", "pore_pressure", "effective_stress",
 		"preconsolidation_stress_low", "preconsolidation_stress", "preconsolidation_stress_high", "ocr_low", "ocr", "ocr_high", "pop", "zone", "zone_probability")
+	points.Note = "low and high are the 5 and 95 % points. At a boundary the first row ends the upper stratum and the second begins the lower. The table profile.csv also has Cc, and su and K0 by correlation."
 	return []Block{
 		Zones(*b).Without("borehole"),
 		likely(Strata(*b)).Without("borehole"),
@@ -261,7 +262,7 @@ func findingBlocks(c Content) []Block {
 	open := len(fs.Open())
 	return []Block{
 		Paragraph(fmt.Sprintf("%s, of which %d open. What was left out stays on the drawings and in the tables, with the reason.", counted(len(fs), "finding"), open)),
-		Findings(fs).Only("number", "severity", "borehole", "depth", "specimen", "quantity", "message", "causes", "action", "answer"),
+		Findings(fs).Only("number", "severity", "borehole", "depth", "specimen", "quantity", "message", "causes", "action", "source", "answer"),
 		Decisions(s),
 		Effects(c.Effects),
 	}
@@ -301,8 +302,8 @@ func handCheck(p *profile.Profile) []Block {
 			}
 			e.Steps = steps
 			return []Block{
-				Paragraph(fmt.Sprintf("Every number of this report can be shown in this way with the command explain, here for %s at %s m.", e.Borehole, depth(e.Depth))),
-				Explanation(e).Only("group", "step", "formula", "numbers", "value", "unit", "source"),
+				Paragraph(fmt.Sprintf("The numbers of any depth can be shown in this way with the command explain, in full; here the stresses and the test of %s at %s m.", e.Borehole, depth(e.Depth))),
+				Explanation(e).Only("group", "step", "formula", "numbers", "value", "unit", "words", "source", "mark"),
 			}
 		}
 	}
@@ -355,7 +356,7 @@ var cautions = []string{
 	"This is an interpretation of tests on small specimens. It is for use by, and under the responsibility of, an engineer licensed to practise where the work is, and gives way to local codes and to the requirements of the authorities.",
 	"Ground between boreholes is not known. Layers, water and stress history can change within metres.",
 	"Disturbance of specimens lowers the preconsolidation stress that a test shows, and the method and rate of the test shift it by 10 to 30 % (common practice); values of different kinds of test are not the same quantity.",
-	"Correlations give a rough check and no substitute for tests. Those whose coefficients were not read in their source are marked as such and must be checked before they are relied on.",
+	"Correlations give a rough check and no substitute for tests. The table of the correlations used says how far the coefficients of each were checked; those from memory, unverified, must be checked before they are relied on.",
 	"A low value is not always the safe one: heave, downdrag, wall pressure and drivability ask for the high one.",
 	"An overconsolidation ratio below one is either ground that still settles or a disturbed specimen, a wrong water level or a wrong unit weight. Measure the pore pressure before choosing between them.",
 }

@@ -442,7 +442,7 @@ func Tables(c Content) []*Table {
 	all := []*Table{
 		SettingsTable(p.Site), Points(p.Boreholes...), Tests(p.Boreholes...), Zones(p.Boreholes...), Strata(p.Boreholes...),
 		Specimens(p.Specimens), Methods(p.Specimens), Grades(p.Specimens), Stages(p.Specimens),
-		Cone(p.Boreholes...), ConeFactors(p.Boreholes...), ConeNotes(p.Boreholes...), Compression(p.Boreholes...), Layers(p.Site), Water(p.Site), Results(p.Site), Assumptions(p.Boreholes...), furtherTests(p), Sources(p.Site), Findings(c.Found), Decisions(p.Site), Effects(c.Effects), Design(c.Values), DesignWarnings(c.Values),
+		Cone(p.Boreholes...), ConeFactors(p.Boreholes...), ConeNotes(p.Boreholes...), Compression(p.Boreholes...), Relations(p), Layers(p.Site), Water(p.Site), Results(p.Site), Assumptions(p.Boreholes...), furtherTests(p), Sources(p.Site), Findings(c.Found), Decisions(p.Site), Effects(c.Effects), Design(c.Values), DesignWarnings(c.Values),
 	}
 	if c.Design {
 		all = append(all, Ways(c.Values), Lines(p, c.Values))

@@ -116,7 +116,7 @@ func testWords(b *profile.BoreholeProfile, s *profile.StratumProfile) string {
 			continue
 		}
 		total++
-		if t.Bound != profile.Exact {
+		if t.Used && t.Bound != profile.Exact {
 			bounds++
 		}
 		if !t.Used {
@@ -125,14 +125,23 @@ func testWords(b *profile.BoreholeProfile, s *profile.StratumProfile) string {
 			conflicts = append(conflicts, fmt.Sprintf("%s at %s m", orUnnamedTest(t.Specimen), depth(t.Depth)))
 		}
 	}
-	if total == 0 {
+	used := total - len(out)
+	text := ""
+	switch {
+	case total == 0 && strings.HasPrefix(s.Sentence, "No test"):
+		return "" // the sentence says so already
+	case total == 0:
 		return " No preconsolidation stress was measured in it."
+	case used > 0 && bounds == used:
+		text = fmt.Sprintf(" Of its own it has %s, which only bounds σ′p.", counted(used, "test"))
+		if used > 1 {
+			text = fmt.Sprintf(" Of its own it has %s, which only bound σ′p.", counted(used, "test"))
+		}
+	case bounds > 0:
+		text = fmt.Sprintf(" It rests on %s, %d of them only a bound.", counted(used, "test"), bounds)
+	default:
+		text = fmt.Sprintf(" It rests on %s.", counted(used, "test"))
 	}
-	text := fmt.Sprintf(" It rests on %s", counted(total-len(out), "test"))
-	if bounds > 0 {
-		text += fmt.Sprintf(", %d of them only a bound", bounds)
-	}
-	text += "."
 	if len(out) > 0 {
 		text += fmt.Sprintf(" Not used: %s.", strings.Join(out, "; "))
 	}
