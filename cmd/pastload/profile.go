@@ -33,6 +33,7 @@ func newProfileCommand() *cobra.Command {
 			if err != nil {
 				return err
 			}
+			c.remarkDeep(cmd, profiles, depths)
 			all := together(profiles)
 			if c.format == "table" {
 				return c.show(cmd, all, report.Terminal(all.Boreholes)...)
@@ -43,6 +44,22 @@ func newProfileCommand() *cobra.Command {
 	c.register(cmd)
 	cmd.Flags().StringVar(&at, "at", "", "further depths in m, separated by commas")
 	return cmd
+}
+
+// remarkDeep says which of the depths asked for lie below a borehole.
+func (c *common) remarkDeep(cmd *cobra.Command, profiles []*profile.Profile, depths []float64) {
+	for _, p := range profiles {
+		for _, b := range p.Boreholes {
+			if len(b.Points) == 0 {
+				continue
+			}
+			for _, d := range depths {
+				if first, last := b.Points[0].Depth, b.Points[len(b.Points)-1].Depth; d < first || d > last {
+					c.remark(cmd, "%s: %g m lies outside its profile, %g to %g m", b.Borehole, d, first, last)
+				}
+			}
+		}
+	}
 }
 
 // depthList reads a list of depths.
@@ -73,7 +90,10 @@ func together(profiles []*profile.Profile) *profile.Profile {
 			b.Borehole = fmt.Sprintf("%s/%s", p.Site.Name, b.Borehole)
 			all.Boreholes = append(all.Boreholes, b)
 		}
-		all.Specimens = append(all.Specimens, p.Specimens...)
+		for _, s := range p.Specimens {
+			s.Borehole = fmt.Sprintf("%s/%s", p.Site.Name, s.Borehole)
+			all.Specimens = append(all.Specimens, s)
+		}
 	}
 	return all
 }

@@ -3,6 +3,7 @@ package main
 import (
 	"errors"
 	"fmt"
+	"slices"
 	"strings"
 
 	"github.com/spf13/cobra"
@@ -46,11 +47,12 @@ that a decision answers stay in the list with the answer.`,
 				}
 				if len(profiles) > 1 {
 					for i := range found {
-						found[i].Borehole = p.Site.Name + "/" + found[i].Borehole
+						ofSite(&found[i], p.Site.Name)
 					}
 				}
 				all = append(all, found...)
 			}
+			slices.SortStableFunc(all, func(a, b review.Finding) int { return b.Severity.Rank() - a.Severity.Rank() })
 			if open {
 				all = all.Open()
 			}
@@ -67,6 +69,21 @@ that a decision answers stay in the list with the answer.`,
 	cmd.Flags().BoolVar(&open, "open", false, "only findings without an answer")
 	choices(cmd, "fail-on", "error", "conflict", "doubt", "note")
 	return cmd
+}
+
+// ofSite says in a finding which of several sites it is about.
+func ofSite(f *review.Finding, site string) {
+	f.ID = site + "/" + f.ID
+	if f.Borehole != "" {
+		f.Borehole = site + "/" + f.Borehole
+	} else {
+		f.Borehole = site
+	}
+	also := slices.Clone(f.Also)
+	for i := range also {
+		also[i].Borehole = site + "/" + also[i].Borehole
+	}
+	f.Also = also
 }
 
 // orNone makes no findings an empty list in JSON, not null.
